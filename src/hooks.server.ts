@@ -1,0 +1,112 @@
+import { building } from '$app/environment';
+import { NotFound } from '$lib/refusal';
+import type { Context } from '$lib/server/context';
+import { closeDb, db } from '$lib/server/db';
+import { env } from '$lib/server/env';
+import { headers } from '$lib/server/http/headers';
+import { tasks } from '$lib/server/jobs';
+import { log } from '$lib/server/log';
+import { authHandle, keyHolder, shopsOf } from '$lib/server/people';
+import { startQueue, stopQueue } from '$lib/server/queue';
+import {
+	json,
+	redirect,
+	type Handle,
+	type HandleServerError,
+	type RequestEvent,
+	type ServerInit
+} from '@sveltejs/kit';
+import { sequence } from '@sveltejs/kit/hooks';
+
+export const init: ServerInit = async () => {
+	if (building) return;
+	env();
+	await startQueue(tasks);
+	process.on('sveltekit:shutdown', async () => {
+		await stopQueue();
+		await closeDb();
+		process.exit(0);
+	});
+};
+
+/** Who is it: a person with a session, or a script with a key. */
+const identify: Handle = async ({ event, resolve }) => {
+	event.locals.person = null;
+	event.locals.ctx = null;
+	event.locals.shops = [];
+	const key = event.request.headers.get('authorization')?.match(/^Bearer (\S+)$/i)?.[1];
+	if (key) await identifyKey(event, key);
+	else await identifyPerson(event);
+	return resolve(event);
+};
+
+async function identifyPerson(event: RequestEvent) {
+	const user = (await event.locals.auth())?.user;
+	if (!user?.id || !user.email) return;
+	event.locals.person = { id: user.id, name: user.name ?? user.email, email: user.email };
+	const shops = await shopsOf(db(), user.id);
+	event.locals.shops = shops.map(({ slug, name, role }) => ({ slug, name, role }));
+	const here = shops.find((shop) => shop.slug === event.params.shop?.toLowerCase());
+	if (here) event.locals.ctx = contextOf(here);
+}
+
+async function identifyKey(event: RequestEvent, key: string) {
+	const holder = await keyHolder(db(), key);
+	if (holder && holder.slug === event.params.shop) event.locals.ctx = contextOf(holder);
+}
+
+const contextOf = (here: Pick<Context, 'shopId' | 'memberId' | 'role'>): Context => ({
+	db: db(),
+	shopId: here.shopId,
+	memberId: here.memberId,
+	role: here.role,
+	now: new Date()
+});
+
+/** A shop's address opens to its members; to others it is as if it were not there. */
+const guard: Handle = async ({ event, resolve }) => {
+	const { ctx, person } = event.locals;
+	if (!event.params.shop || ctx) return resolve(event);
+	const api = event.url.pathname.startsWith('/api/');
+	const signedOut = !person;
+	if (api && signedOut)
+		return json(
+			{ code: 'not signed in', message: 'Sign in, or send a key of this shop.' },
+			{ status: 401 }
+		);
+	if (api) return json({ code: 'not found', message: new NotFound().message }, { status: 404 });
+	if (signedOut)
+		redirect(303, `/sign-in?to=${encodeURIComponent(event.url.pathname + event.url.search)}`);
+	return new Response(new NotFound().message, { status: 404 });
+};
+
+const secure: Handle = async ({ event, resolve }) => {
+	const response = await resolve(event, {
+		transformPageChunk: ({ html }) =>
+			html.replace('<html lang="en">', `<html lang="en"${theme(event)}>`),
+		preload: ({ type }) => type === 'js' || type === 'css' || type === 'font'
+	});
+	for (const [name, value] of headers(event)) response.headers.set(name, value);
+	return response;
+};
+
+const THEMES = ['light', 'dark', 'sunlight'];
+
+const theme = (event: RequestEvent) => {
+	const chosen = event.cookies.get('theme');
+	return chosen && THEMES.includes(chosen) ? ` data-theme="${chosen}"` : '';
+};
+
+export const handle = sequence(secure, authHandle, identify, guard);
+
+export const handleError: HandleServerError = ({ error, event, status, message }) => {
+	if (status === 404) return { message: 'This page is not here. Look at the address, or go back.' };
+	const id = crypto.randomUUID();
+	log().error({
+		id,
+		status,
+		path: event.url.pathname,
+		fault: error instanceof Error ? error.stack : message
+	});
+	return { message: 'Something went wrong on our side. Nothing you saved is lost; try again.', id };
+};

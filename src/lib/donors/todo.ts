@@ -1,0 +1,55 @@
+import { gatesShut, type GateDonor, type GateRelease } from './state';
+import type { DonorShot } from './words';
+
+export interface Todo {
+	id: 'cause' | 'release' | 'hold' | 'safe' | 'photos';
+	said: string;
+}
+
+/** The six views that say later what came in. */
+export const WANTED_SHOTS = [
+	'front',
+	'back',
+	'label',
+	'pto',
+	'carburetor side',
+	'failure'
+] as const;
+
+export const SHOT_SAID: Record<DonorShot, string> = {
+	front: 'front',
+	back: 'back',
+	label: 'label or plate',
+	pto: 'PTO end',
+	'carburetor side': 'carburetor side',
+	failure: 'inside, or the failure',
+	box: 'the box',
+	other: 'something else'
+};
+
+const SHORT = {
+	cause: 'Name the cause of death',
+	release: 'Record the release',
+	safe: 'Make it safe',
+	hold: ''
+};
+
+/** What is still to be done for a donor before and beside stripping; empty once it is gone or stripped. */
+export function todoOf(
+	donor: GateDonor,
+	release: GateRelease | null,
+	shots: readonly DonorShot[],
+	today: string
+): Todo[] {
+	if (donor.state === 'stripped' || donor.state === 'gone') return [];
+	const todo: Todo[] = gatesShut(donor, release, today).map(({ gate, said }) => ({
+		id: gate,
+		said: SHORT[gate] || said
+	}));
+	const missing = WANTED_SHOTS.filter((shot) => !shots.includes(shot));
+	if (missing.length > 0) {
+		const said = `Photos: ${missing.map((shot) => SHOT_SAID[shot]).join(', ')}`;
+		todo.push({ id: 'photos', said });
+	}
+	return todo;
+}

@@ -1,0 +1,182 @@
+import { z } from 'zod';
+import { isKindId } from '../trade';
+import { GRADES, PROOFS } from './words';
+
+const words = (most: number) => z.string().trim().max(most, `Keep it under ${most} characters`);
+const said = (ask: string, most = 120) =>
+	z
+		.string({ error: ask })
+		.trim()
+		.min(1, ask)
+		.max(most, `Keep it under ${most} characters`);
+
+const kindId = z
+	.string({ error: 'Choose what kind of part it is' })
+	.refine(isKindId, 'Choose a kind from the list');
+const grade = z.enum(GRADES, { error: 'Choose a grade' });
+const bin = said('Type the address of the bin, or scan it', 40);
+const grams = z.coerce
+	.number({ error: 'Enter the mass in grams' })
+	.int('Enter whole grams')
+	.min(1, 'Enter the mass in grams')
+	.max(200_000, 'Enter the mass in grams, up to 200 kg');
+const version = z.coerce.number({ error: 'Reload the page and save again' }).int();
+
+/** A list as JSON sends it, or one field with commas or new lines between. */
+const numbers = z
+	.union([z.string(), z.array(z.string())])
+	.transform((typed) => (typeof typed === 'string' ? typed.split(/[,;\n]/) : typed))
+	.pipe(z.array(z.string().trim().max(60, 'Keep each part number under 60 characters')))
+	.transform((list) => [...new Set(list.filter((number) => number !== ''))])
+	.pipe(z.array(z.string()).max(20, 'Keep it to 20 part numbers'));
+
+/** Ticks: one alone arrives as a word. */
+const ticks = z
+	.union([z.string(), z.array(z.string())])
+	.transform((ticked) => (typeof ticked === 'string' ? [ticked] : ticked));
+
+const yesNo = z
+	.union([z.boolean(), z.enum(['yes', 'no', 'true', 'false', 'on'])])
+	.transform((typed) => typed === true || typed === 'yes' || typed === 'true' || typed === 'on');
+
+export const Proof = z.object({
+	how: z.enum(PROOFS, { error: 'Choose how it was checked' }),
+	figure: z.coerce.number({ error: 'Enter the figure as a number' }).finite().optional(),
+	unit: words(20).optional(),
+	passed: yesNo,
+	note: words(500).optional()
+});
+export type Proof = z.infer<typeof Proof>;
+
+export const Scrap = z.object({
+	reason: said('Say why it goes to scrap'),
+	destroyed: yesNo.optional()
+});
+export type Scrap = z.infer<typeof Scrap>;
+
+const logged = {
+	kind: kindId,
+	grade: grade.optional(),
+	label: words(120).optional(),
+	numbers: numbers.optional(),
+	proof: Proof.optional(),
+	massGrams: grams.optional(),
+	bin: bin.optional(),
+	note: words(1000).optional(),
+	checklist: ticks.optional(),
+	set: words(200).optional(),
+	setMissing: words(200).optional(),
+	/** Straight to scrap, with the reason; what can never be stock is logged so. */
+	scrapped: Scrap.optional()
+};
+
+const gradeOrScrap = (input: { grade?: unknown; scrapped?: unknown }) =>
+	input.grade !== undefined || input.scrapped !== undefined;
+const ASK_GRADE = { error: 'Choose a grade', path: ['grade'] };
+
+export const Pull = z.object(logged).refine(gradeOrScrap, ASK_GRADE);
+export type Pull = z.infer<typeof Pull>;
+
+export const OldStock = z
+	.object({ ...logged, engine: words(120).optional() })
+	.refine(gradeOrScrap, ASK_GRADE);
+export type OldStock = z.infer<typeof OldStock>;
+
+/** The same, as a flat form sends it: the proof's fields beside the others, `scrap` a button. */
+export const LogForm = z
+	.object({
+		...logged,
+		proof: z.undefined().optional(),
+		scrapped: z.undefined().optional(),
+		engine: words(120).optional(),
+		how: Proof.shape.how.optional(),
+		figure: Proof.shape.figure,
+		unit: Proof.shape.unit,
+		passed: yesNo.optional(),
+		photo: z.instanceof(File).optional(),
+		scrap: z.enum(['scrap', 'destroy']).optional(),
+		reason: words(120).optional()
+	})
+	.transform(({ how, figure, unit, passed, scrap, reason, photo: _, ...rest }) => ({
+		...rest,
+		proof: how ? { how, figure, unit, passed: passed ?? true } : undefined,
+		scrapped: scrap
+			? { reason: reason ?? (scrap === 'destroy' ? 'destroyed, not safe' : 'not worth keeping'), destroyed: scrap === 'destroy' }
+			: undefined
+	}))
+	.refine(gradeOrScrap, ASK_GRADE);
+export type LogForm = z.infer<typeof LogForm>;
+
+export const Move = z.object({ bin });
+export type Move = z.infer<typeof Move>;
+
+export const GradeInput = z.object({ grade, version });
+export type GradeInput = z.infer<typeof GradeInput>;
+
+/** What is left out stays as it is. */
+export const Edit = z.object({
+	version,
+	grade: grade.optional(),
+	label: words(120).optional(),
+	numbers: numbers.optional(),
+	massGrams: grams.nullish(),
+	note: words(1000).optional(),
+	set: words(200).optional(),
+	setMissing: words(200).optional(),
+	engine: words(120).optional()
+});
+export type Edit = z.infer<typeof Edit>;
+
+/** A form leaves out what was emptied, so there everything absent is empty. */
+export const EditForm = Edit.transform((typed) => ({
+	label: '',
+	numbers: [],
+	massGrams: null,
+	note: '',
+	set: '',
+	setMissing: '',
+	...typed
+}));
+
+export const Hold = z.object({
+	for: said('Say who or which job it is held for', 80),
+	/** Day or moment; without one it is a week. */
+	until: z
+		.union([z.iso.date(), z.iso.datetime({ offset: true })], { error: 'Enter the date it is held until' })
+		.optional()
+});
+export type Hold = z.infer<typeof Hold>;
+
+export const Nothing = z.object({});
+
+export const Fit = z.object({ job: said('Say which job it was fitted on', 80) });
+export type Fit = z.infer<typeof Fit>;
+
+export const Sell = z.object({
+	cents: z
+		.int({ error: 'Enter the price in whole cents' })
+		.min(0, 'Enter a price of nothing or more')
+		.max(100_000_000, 'Enter a smaller price'),
+	to: words(80).optional()
+});
+export type Sell = z.infer<typeof Sell>;
+
+/** Money as people type it: 46 or 46.50, with a comma or a point. */
+export const SellForm = z
+	.object({
+		price: z
+			.string({ error: 'Enter what it was sold for' })
+			.trim()
+			.regex(/^\d{1,6}([.,]\d{1,2})?$/, 'Enter the price like 46 or 46.50'),
+		to: words(80).optional()
+	})
+	.transform(({ price, to }) => ({ cents: Math.round(Number(price.replace(',', '.')) * 100), to }));
+
+export const TakeBack = z.object({ reason: said('Say why it came back') });
+export type TakeBack = z.infer<typeof TakeBack>;
+
+export const Undo = z.object({
+	event: z.coerce.number().int().positive(),
+	back: z.string().regex(/^\/(?!\/)/, 'Go back and try again').optional()
+});
+export type Undo = z.infer<typeof Undo>;

@@ -1,0 +1,100 @@
+import type { PhotoLinks } from '$lib/photos/links';
+import type { Grade, PartState, ProofWay } from './words';
+import type { Verdict } from './verdict-view';
+
+/** One row of any list of parts. */
+export interface PartItem {
+	id: number;
+	tag: string;
+	kind: string;
+	kindName: string;
+	label: string;
+	grade: Grade;
+	state: PartState;
+	/** The bin's address, or the donor box it lies in; null while it lies nowhere. */
+	bin: string | null;
+	/** D12, or null for old stock. */
+	donor: string | null;
+	engine: string;
+	askedCents: number | null;
+	copyCents: number | null;
+	newCents: number | null;
+	verdict: Verdict['verdict'] | null;
+	gainCents: number | null;
+	/** Address of a small picture. */
+	photo: string | null;
+	heldBy: string | null;
+}
+
+export interface ProofView {
+	how: ProofWay;
+	figure: number | null;
+	unit: string;
+	note: string;
+	passed: boolean;
+	by: string;
+	at: Date;
+}
+
+/** One line of a thing's history: who did what, when; `undo` names the event while it can be undone. */
+export interface Happening {
+	id: number;
+	at: Date;
+	by: string;
+	said: string;
+	undo: boolean;
+}
+
+export interface PartDonor {
+	id: number;
+	number: string;
+	state: string;
+	cause: string | null;
+	secondCause: string | null;
+	sureness: string | null;
+}
+
+export interface PartView extends Omit<PartItem, 'photo'> {
+	version: number;
+	system: string;
+	numbers: string[];
+	set: string;
+	setMissing: string;
+	checklist: string[];
+	massGrams: number | null;
+	note: string;
+	binPlace: string;
+	inRedBin: boolean;
+	donorOf: PartDonor | null;
+	heldUntil: Date | null;
+	outAs: 'fitted' | 'sold' | null;
+	outTo: string | null;
+	outCents: number | null;
+	scrapReason: string | null;
+	destroyed: boolean;
+	/** It failed or came back and nothing has proved it since. */
+	doubtful: boolean;
+	pulledAt: Date;
+	proofs: ProofView[];
+	photos: { id: number; links: PhotoLinks; alt: string }[];
+	history: Happening[];
+	worth: Verdict | null;
+	/** The next unit that would answer the same call. */
+	next: PartItem | null;
+	/** Why somebody else has it, or where it went: by whom and since when. */
+	taken: string | null;
+}
+
+/** A kind that a donor still carries. */
+export interface KindStillOn {
+	kind: string;
+	kindName: string;
+	system: string;
+	chance: number;
+	level: 'high' | 'medium' | 'low' | 'ruined';
+	minutes: number;
+	verdict: Verdict['verdict'] | null;
+	gainCents: number | null;
+	/** Why it cannot become stock; null where it can. */
+	never: string | null;
+}

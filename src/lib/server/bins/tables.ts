@@ -1,0 +1,50 @@
+import { BIN_SIZES } from '../../bins/size';
+import { sql } from 'drizzle-orm';
+import {
+	boolean,
+	check,
+	doublePrecision,
+	foreignKey,
+	integer,
+	pgTable,
+	primaryKey,
+	text,
+	unique,
+	uniqueIndex
+} from 'drizzle-orm/pg-core';
+import { idColumn, shopColumn, time, words } from '../db/columns';
+import { shop } from '../people/tables';
+import { tag } from '../tags/tables';
+
+export const bin = pgTable(
+	'bin',
+	{
+		shopId: shopColumn().references(() => shop.id),
+		id: idColumn(),
+		tag: text('tag').notNull(),
+		address: text('address').notNull(),
+		rack: text('rack'),
+		shelf: integer('shelf'),
+		slot: integer('slot'),
+		size: text('size', { enum: BIN_SIZES }).notNull(),
+		litres: doublePrecision('litres'),
+		yearlyCostCents: integer('yearly_cost_cents'),
+		purpose: text('purpose').notNull().default(''),
+		place: text('place').notNull().default(''),
+		red: boolean('red').notNull().default(false),
+		retiredAt: time('retired_at'),
+		version: integer('version').notNull().default(1),
+		createdAt: time('created_at').notNull()
+	},
+	(t) => [
+		primaryKey({ columns: [t.shopId, t.id] }),
+		unique('bin_tag').on(t.shopId, t.tag),
+		uniqueIndex('bin_address')
+			.on(t.shopId, sql`upper(${t.address})`)
+			.where(sql`${t.retiredAt} is null`),
+		foreignKey({ columns: [t.shopId, t.tag], foreignColumns: [tag.shopId, tag.code] }),
+		check('bin_size', sql`${t.size} in (${words(BIN_SIZES)})`),
+		check('bin_litres', sql`${t.litres} > 0`),
+		check('bin_cost', sql`${t.yearlyCostCents} >= 0`)
+	]
+);

@@ -1,0 +1,26 @@
+import { inShop, type Context } from '../context';
+import type { Tx } from '../db';
+import { record } from '../people';
+import { mintTag } from '../tags';
+import { donorRow } from './rows';
+import { box } from './tables';
+
+export async function addBoxRow(tx: Tx, ctx: Context, donorId: number): Promise<{ tag: string }> {
+	const tag = await mintTag(tx, ctx, 'box');
+	await tx.insert(box).values({ shopId: ctx.shopId, donorId, tag, createdAt: ctx.now });
+	return { tag };
+}
+
+/** One more box for a donor, when one does not hold it all. */
+export const addBox = (ctx: Context, ref: string): Promise<{ tag: string }> =>
+	inShop(ctx, async (tx, ctx) => {
+		const row = await donorRow(tx, ctx, ref, { lock: true });
+		const { tag } = await addBoxRow(tx, ctx, row.id);
+		await record(tx, ctx, {
+			about: 'donor',
+			aboutId: row.id,
+			what: 'got another box',
+			detail: { tag }
+		});
+		return { tag };
+	});

@@ -1,0 +1,82 @@
+import type { DonorEdit, SafeInput } from '$lib/donors/input';
+import { sayNumber } from '$lib/donors/reference';
+import { Refused } from '$lib/refusal';
+import { SAFE_TICKS } from '$lib/trade';
+import { and, eq } from 'drizzle-orm';
+import { inShop, type Context } from '../context';
+import { record } from '../people';
+import { donorColumns } from './columns';
+import { donorRow, type DonorRow } from './rows';
+import { donor } from './tables';
+
+const SAID: Partial<Record<keyof DonorRow, string>> = {
+	maker: 'maker',
+	model: 'model',
+	typeCode: 'type',
+	dateCode: 'code',
+	serial: 'serial',
+	displacementCc: 'displacement',
+	shaft: 'shaft',
+	engineClass: 'class',
+	fittings: 'fittings',
+	offMachine: 'machine it came off',
+	cause: 'cause of death',
+	secondCause: 'second cause',
+	sureness: 'how sure',
+	note: 'note',
+	safeTicks: 'safe ticks'
+};
+
+const plain = (value: unknown): string =>
+	Array.isArray(value) ? value.join(', ') : `${value ?? ''}`;
+
+const quoted = (value: unknown) => (plain(value) === '' ? 'empty' : `“${plain(value)}”`);
+
+/** Refuses when somebody saved in between, with both values of all that differs. */
+function needVersion(row: DonorRow, version: number | undefined, typed: Partial<DonorRow>): void {
+	if (version === undefined || version === row.version) return;
+	const fields = Object.keys(SAID) as (keyof DonorRow)[];
+	const both = fields
+		.filter((field) => field in typed && plain(row[field]) !== plain(typed[field]))
+		.map(
+			(field) => `${SAID[field]} is now ${quoted(row[field])}, you typed ${quoted(typed[field])}`
+		);
+	throw new Refused(
+		'changed',
+		`Somebody saved ${sayNumber(row.number)} meanwhile: ${both.join('; ') || 'nothing that you typed differs'}. Look and save again.`
+	);
+}
+
+const save = (
+	ctx: Context,
+	ref: string,
+	version: number | undefined,
+	columns: (row: DonorRow) => Partial<DonorRow>,
+	what: string
+) =>
+	inShop(ctx, async (tx, ctx) => {
+		const row = await donorRow(tx, ctx, ref, { lock: true });
+		const typed = columns(row);
+		needVersion(row, version, typed);
+		await tx
+			.update(donor)
+			.set({ ...typed, version: row.version + 1 })
+			.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, row.id)));
+		const { paidCents: _, ...detail } = typed;
+		await record(tx, ctx, { about: 'donor', aboutId: row.id, what, detail });
+	});
+
+export const editDonor = (ctx: Context, ref: string, input: DonorEdit): Promise<void> =>
+	save(
+		ctx,
+		ref,
+		input.version,
+		(row) => donorColumns(ctx, input, row),
+		input.cause === undefined ? 'edited what it is' : 'named the cause of death'
+	);
+
+/** Sets the safe-to-store ticks, in the order they are done. */
+export const tickSafe = (ctx: Context, ref: string, input: SafeInput): Promise<void> => {
+	const ticks = SAFE_TICKS.map((tick) => tick.id).filter((id) => input.ticks.includes(id));
+	return save(ctx, ref, input.version, () => ({ safeTicks: ticks }), 'ticked what is safe');
+};

@@ -1,0 +1,77 @@
+import type { DonorShot } from '$lib/donors/words';
+import { NotFound } from '$lib/refusal';
+import { and, eq } from 'drizzle-orm';
+import { inShop, type Context } from '../context';
+import type { Tx } from '../db';
+import { record } from '../people';
+import { addPhotoRow, deletePhoto, keepPhoto, restorePhoto, type KeptPhoto } from '../photos';
+import { donorRow } from './rows';
+import { donorPhoto } from './tables';
+
+/** Ties a picture that is in the store to a donor. */
+export async function attachPhoto(
+	tx: Tx,
+	ctx: Context,
+	donorId: number,
+	kept: KeptPhoto,
+	shot: DonorShot
+): Promise<{ id: number }> {
+	const { id } = await addPhotoRow(ctx, kept);
+	await tx.insert(donorPhoto).values({ shopId: ctx.shopId, donorId, photoId: id, shot });
+	await record(tx, ctx, {
+		about: 'donor',
+		aboutId: donorId,
+		what: 'added a photo',
+		detail: { id, shot }
+	});
+	return { id };
+}
+
+/** Ties a kept picture to the donor that is named. */
+export const addKeptPhoto = (
+	ctx: Context,
+	ref: string,
+	kept: KeptPhoto,
+	shot: DonorShot
+): Promise<{ id: number }> =>
+	inShop(ctx, async (tx, ctx) =>
+		attachPhoto(tx, ctx, (await donorRow(tx, ctx, ref)).id, kept, shot)
+	);
+
+export async function addDonorPhoto(
+	ctx: Context,
+	ref: string,
+	bytes: Buffer,
+	shot: DonorShot
+): Promise<{ id: number }> {
+	await inShop(ctx, (tx, ctx) => donorRow(tx, ctx, ref));
+	return addKeptPhoto(ctx, ref, await keepPhoto(ctx, bytes), shot);
+}
+
+const ofDonor = (
+	ctx: Context,
+	ref: string,
+	id: number,
+	what: (ctx: Context, id: number) => Promise<void>
+) =>
+	inShop(ctx, async (tx, ctx) => {
+		const { id: donorId } = await donorRow(tx, ctx, ref);
+		const [row] = await tx
+			.select({ photoId: donorPhoto.photoId })
+			.from(donorPhoto)
+			.where(
+				and(
+					eq(donorPhoto.shopId, ctx.shopId),
+					eq(donorPhoto.donorId, donorId),
+					eq(donorPhoto.photoId, id)
+				)
+			);
+		if (!row) throw new NotFound();
+		await what(ctx, id);
+	});
+
+export const removeDonorPhoto = (ctx: Context, ref: string, id: number) =>
+	ofDonor(ctx, ref, id, deletePhoto);
+
+export const putBackDonorPhoto = (ctx: Context, ref: string, id: number) =>
+	ofDonor(ctx, ref, id, restorePhoto);

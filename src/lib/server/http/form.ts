@@ -1,0 +1,28 @@
+type Typed = Record<string, FormDataEntryValue | FormDataEntryValue[]>;
+
+const isNothing = (value: FormDataEntryValue) =>
+	typeof value === 'string' ? value.trim() === '' : value.size === 0;
+
+/** A form as an object: empty fields are absent, a name sent twice or ending in [] is a list. */
+export function formObject(form: FormData): Typed {
+	const typed: Typed = {};
+	for (const name of new Set(form.keys())) {
+		const values = form.getAll(name).filter((value) => !isNothing(value));
+		const field = name.replace(/\[\]$/, '');
+		if (name.endsWith('[]')) typed[field] = values;
+		else if (values.length > 1) typed[field] = values;
+		else if (values[0] !== undefined) typed[field] = values[0];
+	}
+	return typed;
+}
+
+/** What was typed, to be shown again; files cannot be. */
+export function typedText(typed: Typed): Record<string, string | string[]> {
+	const text: Record<string, string | string[]> = {};
+	for (const [name, value] of Object.entries(typed)) {
+		if (/password/i.test(name)) continue;
+		if (typeof value === 'string') text[name] = value;
+		else if (Array.isArray(value)) text[name] = value.filter((one) => typeof one === 'string');
+	}
+	return text;
+}

@@ -1,0 +1,111 @@
+import { engineKey } from '$lib/codes/number';
+import type { Pull } from '$lib/parts/input';
+import { unticked } from '$lib/parts/keeping';
+import type { PartState } from '$lib/parts/words';
+import { kind } from '$lib/trade';
+import { Refused } from '$lib/refusal';
+import type { Context } from '../context';
+import type { Tx } from '../db';
+import type { donor } from '../donors/tables';
+import { mintTag } from '../tags';
+import { chanceOn } from './chance-on';
+import { keysOf } from './edit';
+import { placeNamed, redPlace, type Place } from './place';
+import { writeProof } from './prove';
+import { recordPart, wordsOf, type Done } from './row';
+import { part, partPhoto } from './tables';
+
+export interface Logged extends Done {
+	id: number;
+	state: PartState;
+	to: string | null;
+}
+
+export interface Origin {
+	donor: typeof donor.$inferSelect | null;
+	engine: string;
+	photoId?: number;
+}
+
+/** Never-reuse kinds and ruined ones become no stock; safety kinds only with every tick of their list. */
+async function askRules(ctx: Context, input: Pull, from: Origin['donor']): Promise<void> {
+	if (input.scrapped) return;
+	const { never } = await chanceOn(ctx, input.kind, from);
+	if (never) throw new Refused('gate', `${never} It can be logged as scrapped or destroyed.`, 'kind');
+	const left = unticked(input.kind, input.checklist ?? []);
+	if (left.length)
+		throw new Refused(
+			'gate',
+			`${kind(input.kind).name} is kept only through its checklist. Still to tick: ${left.join(' ')}`,
+			'checklist'
+		);
+}
+
+/** Where it goes first: nowhere yet, a bin, or the red bin when its test was failed. */
+async function firstPlace(tx: Tx, ctx: Context, input: Pull): Promise<{ place: Place | null; state: PartState }> {
+	if (input.scrapped) return { place: null, state: 'scrapped' };
+	if (input.proof && !input.proof.passed) return { place: await redPlace(tx, ctx), state: 'back' };
+	if (!input.bin) return { place: null, state: 'pulled' };
+	const place = await placeNamed(tx, ctx, input.bin);
+	return { place, state: place.red ? 'back' : 'shelved' };
+}
+
+/** Makes the part: its tag, its row, its proof and the event that says all of it happened. */
+export async function logPart(tx: Tx, ctx: Context, input: Pull, origin: Origin): Promise<Logged> {
+	await askRules(ctx, input, origin.donor);
+	const { place, state } = await firstPlace(tx, ctx, input);
+	const tag = await mintTag(tx, ctx, 'part');
+	const id = await insertPart(tx, ctx, { input, origin, place, state, tag });
+	if (input.proof) await writeProof(tx, ctx, id, input.proof);
+	if (origin.photoId !== undefined)
+		await tx.insert(partPhoto).values({ shopId: ctx.shopId, partId: id, photoId: origin.photoId });
+	const detail = {
+		kind: input.kind,
+		grade: input.grade ?? 'core',
+		to: place?.said,
+		reason: input.scrapped?.reason,
+		proof: input.proof
+	};
+	const eventId = await recordPart(tx, ctx, { id, state: null }, 'pull', state, detail);
+	return { id, tag, eventId, state, to: place?.said ?? null };
+}
+
+interface NewPart {
+	input: Pull;
+	origin: Origin;
+	place: Place | null;
+	state: PartState;
+	tag: string;
+}
+
+async function insertPart(tx: Tx, ctx: Context, { input, origin, place, state, tag }: NewPart) {
+	const numbers = input.numbers ?? [];
+	const from = origin.donor;
+	const row = {
+		shopId: ctx.shopId,
+		tag,
+		kind: input.kind,
+		donorId: from?.id ?? null,
+		engine: from ? '' : origin.engine,
+		engineKey: from ? from.engineKey : engineKey(origin.engine),
+		grade: input.grade ?? 'core',
+		state,
+		binId: place?.binId ?? null,
+		boxId: place?.boxId ?? null,
+		label: input.label ?? '',
+		numbers,
+		numberKeys: keysOf(numbers),
+		set: input.set ?? '',
+		setMissing: input.setMissing ?? '',
+		checklist: input.checklist ?? [],
+		massGrams: input.massGrams ?? null,
+		note: input.note ?? '',
+		scrapReason: input.scrapped?.reason ?? null,
+		destroyed: input.scrapped?.destroyed ?? false,
+		pulledAt: ctx.now,
+		changedAt: ctx.now
+	};
+	const searchText = await wordsOf(tx, ctx, row);
+	const [made] = await tx.insert(part).values({ ...row, searchText }).returning({ id: part.id });
+	return made!.id;
+}

@@ -1,0 +1,21 @@
+import { inShop, type Context } from '../context';
+import { addPhotoRow, keepPhoto, type KeptPhoto } from '../photos';
+import { changePart, partFor, type Done } from './row';
+import { partPhoto } from './tables';
+
+/** A picture that is in the store already becomes one of the part's. */
+export const hangPhoto = (
+	ctx: Context,
+	tag: string,
+	kept: KeptPhoto
+): Promise<Done & { id: number }> =>
+	inShop(ctx, async (tx, ctx) => {
+		const row = await partFor(tx, ctx, tag, 'photo');
+		const { id } = await addPhotoRow(ctx, kept);
+		await tx.insert(partPhoto).values({ shopId: ctx.shopId, partId: row.id, photoId: id });
+		return { ...(await changePart(tx, ctx, row, 'photo', {}, { photo: id })), id };
+	});
+
+/** Cleans a picture, puts it into the store, then onto the part. */
+export const addPartPhoto = async (ctx: Context, tag: string, bytes: Buffer) =>
+	hangPhoto(ctx, tag, await keepPhoto(ctx, bytes));

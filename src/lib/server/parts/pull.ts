@@ -1,0 +1,16 @@
+import type { Pull } from '$lib/parts/input';
+import { inShop, type Context } from '../context';
+import { pullableDonor } from '../donors';
+import { logPart, type Logged } from './log-part';
+
+/** Takes a part off a donor on the bench, or off a parked one whose release is in order, and logs it. */
+export const pullPart = (
+	ctx: Context,
+	donorRef: string,
+	input: Pull,
+	photoId?: number
+): Promise<Logged> =>
+	inShop(ctx, async (tx, ctx) => {
+		const donor = await pullableDonor(tx, ctx, donorRef);
+		return logPart(tx, ctx, input, { donor, engine: '', photoId });
+	});

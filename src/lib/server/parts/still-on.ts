@@ -1,0 +1,63 @@
+import { MISTAKE } from '$lib/parts/state';
+import type { KindStillOn } from '$lib/parts/view';
+import { kindsOn, minutesToPull, type EngineClass, type Fitting, type Kind } from '$lib/trade';
+import { and, eq, isNull, ne, or } from 'drizzle-orm';
+import { inShop, type Context } from '../context';
+import type { Tx } from '../db';
+import { donorRow } from '../donors';
+import { chanceOn } from './chance-on';
+import { part } from './tables';
+import { kindVerdicts } from './verdicts';
+
+async function loggedKinds(tx: Tx, ctx: Context, donorId: number): Promise<Set<string>> {
+	const rows = await tx
+		.selectDistinct({ kind: part.kind })
+		.from(part)
+		.where(
+			and(
+				eq(part.shopId, ctx.shopId),
+				eq(part.donorId, donorId),
+				or(isNull(part.scrapReason), ne(part.scrapReason, MISTAKE))
+			)
+		);
+	return new Set(rows.map((row) => row.kind));
+}
+
+/** A piece goes with its whole. */
+const isLogged = (each: Kind, logged: Set<string>) =>
+	logged.has(each.id) || (each.partOf !== null && logged.has(each.partOf));
+
+const MOST_FIRST = (a: KindStillOn, b: KindStillOn) =>
+	Number(a.never !== null) - Number(b.never !== null) ||
+	(b.gainCents ?? -Infinity) - (a.gainCents ?? -Infinity) ||
+	0;
+
+/** The kinds that a donor still carries, most worthwhile first, with what pulling each takes. */
+export const kindsStillOn = (ctx: Context, donorRef: string): Promise<KindStillOn[]> =>
+	inShop(ctx, async (tx, ctx) => {
+		const donor = await donorRow(tx, ctx, donorRef);
+		if (!donor.engineClass) return [];
+		const logged = await loggedKinds(tx, ctx, donor.id);
+		const there = kindsOn(donor.engineClass as EngineClass, donor.fittings as Fitting[]).filter(
+			(each) => !isLogged(each, logged)
+		);
+		const ids = there.map(({ id }) => id);
+		const verdicts = await kindVerdicts(ctx, donor.id, ids);
+		const rows: KindStillOn[] = [];
+		for (const { id, name, system } of there) {
+			const { chance, level, never } = await chanceOn(ctx, id, donor);
+			const verdict = verdicts.get(id);
+			rows.push({
+				kind: id,
+				kindName: name,
+				system,
+				chance,
+				level,
+				minutes: minutesToPull(id, ids),
+				verdict: verdict?.verdict ?? null,
+				gainCents: verdict?.gainCents ?? null,
+				never
+			});
+		}
+		return rows.sort(MOST_FIRST);
+	});

@@ -1,0 +1,128 @@
+import { placeOf, type Queued } from '$lib/parts/place';
+import { verdictOf } from '$lib/parts/verdict';
+import type { Verdict, VerdictPrice, VerdictSubject } from '$lib/parts/verdict-view';
+import type { Policy } from '$lib/people/policy';
+import { may } from '$lib/people/role';
+import type { Season } from '$lib/people/settings';
+import { isStale } from '$lib/prices/stale';
+import { NotFound } from '$lib/refusal';
+import { isCauseId } from '$lib/trade';
+import { and, eq } from 'drizzle-orm';
+import { inShop, type Context } from '../context';
+import { donor } from '../donors/tables';
+import { getPolicy, getShop } from '../people';
+import { pricesFor, type PriceRow } from '../prices';
+import { proofsOf, queued, queueFor, rowsOf, type VerdictRow } from './verdict-rows';
+
+interface Shop {
+	policy: Policy;
+	season: Season;
+}
+
+async function shopFigures(ctx: Context): Promise<Shop> {
+	const policy = await getPolicy(ctx);
+	return { policy, season: (await getShop(ctx)).season };
+}
+
+const causeOf = (id: string | null | undefined) => (id && isCauseId(id) ? id : null);
+
+const priceOf = (row: PriceRow | undefined, ctx: Context, policy: Policy): VerdictPrice | null =>
+	row
+		? {
+				newCents: row.newCents,
+				copyCents: row.copyCents,
+				source: row.source,
+				seenOn: row.seenOn,
+				stale: isStale(row.seenOn, ctx.now, policy.staleDays)
+			}
+		: null;
+
+type Cause = Pick<VerdictRow, 'cause' | 'secondCause' | 'sureness'>;
+
+function subjectOf(
+	asked: Queued & Cause,
+	others: readonly Queued[],
+	price: VerdictPrice | null,
+	policy: Policy
+): VerdictSubject {
+	return {
+		kind: asked.kind,
+		grade: asked.grade,
+		cause: causeOf(asked.cause),
+		secondCause: causeOf(asked.secondCause),
+		sureness: asked.sureness,
+		proofs: [],
+		...placeOf(asked, others),
+		price,
+		massGrams: null,
+		litres: null,
+		bin: null,
+		stillOn: true,
+		family: policy.families[asked.engineKey] ?? 'some',
+		waiting: false
+	};
+}
+
+/** Those who may not see the terms get the verdict without them. */
+function shownTo(ctx: Context, verdict: Verdict): Verdict {
+	return may(ctx.role, 'see terms') ? verdict : { ...verdict, terms: [], figures: null };
+}
+
+/** The verdicts on these parts of the shop; ids that are not there are left out. */
+export const partVerdicts = (
+	ctx: Context,
+	partIds: readonly number[]
+): Promise<Map<number, Verdict>> =>
+	inShop(ctx, async (tx, ctx) => {
+		const found = new Map<number, Verdict>();
+		if (partIds.length === 0) return found;
+		const { policy, season } = await shopFigures(ctx);
+		const rows = await rowsOf(tx, ctx, partIds);
+		const proofs = await proofsOf(tx, ctx, partIds);
+		const queue = (await queueFor(tx, ctx, rows)).map(queued);
+		const prices = await pricesFor(tx, ctx, rows.map((row) => ({ ...row, key: String(row.id) })));
+		for (const row of rows) {
+			const price = priceOf(prices.get(String(row.id)), ctx, policy);
+			const subject: VerdictSubject = {
+				...subjectOf({ ...row, ...queued(row) }, queue, price, policy),
+				proofs: proofs.get(row.id) ?? [],
+				massGrams: row.massGrams,
+				bin: { yearlyCostCents: row.binCostCents, litres: row.binLitres },
+				stillOn: false
+			};
+			found.set(row.id, shownTo(ctx, verdictOf(subject, policy, season)));
+		}
+		return found;
+	});
+
+const LAST = Number.MAX_SAFE_INTEGER;
+
+/** The verdicts on kinds that are still on a donor, as if each were pulled now, untested. */
+export const kindVerdicts = (
+	ctx: Context,
+	donorId: number,
+	kindIds: readonly string[]
+): Promise<Map<string, Verdict>> =>
+	inShop(ctx, async (tx, ctx) => {
+		const [from] = await tx
+			.select()
+			.from(donor)
+			.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, donorId)));
+		if (!from) throw new NotFound();
+		const { policy, season } = await shopFigures(ctx);
+		const { engineKey, cause, secondCause, sureness } = from;
+		const asked = kindIds.map((kind) => ({ key: kind, kind, engineKey, numberKeys: [] }));
+		const queue = (await queueFor(tx, ctx, asked)).map(queued);
+		const prices = await pricesFor(tx, ctx, asked);
+		const place = { id: LAST, pulledAt: LAST, grade: 'untested', state: 'pulled', inRedBin: false } as const;
+		return new Map(
+			asked.map((one) => {
+				const price = priceOf(prices.get(one.key), ctx, policy);
+				const from = { ...one, ...place, cause, secondCause, sureness };
+				const subject = subjectOf(from, queue, price, policy);
+				// it is not off yet, so it does not count among those the shop has
+				const verdict = verdictOf({ ...subject, have: subject.have - 1 }, policy, season);
+				return [one.kind, shownTo(ctx, verdict)];
+			})
+		);
+	});

@@ -1,0 +1,81 @@
+import { may, whoMay, type Ability } from '$lib/people/role';
+import { Refused } from '$lib/refusal';
+import { error, fail, redirect, type ActionFailure, type RequestEvent } from '@sveltejs/kit';
+import type { z } from 'zod';
+import type { Context } from '../context';
+import { faultOf } from '../http/fault';
+import { formObject, typedText } from '../http/form';
+import { fingerprint, once } from './once';
+
+export type Event = RequestEvent;
+
+/** The context of the request when its member may do this; refused in words when not. */
+export function contextFor(event: Event, ability: Ability): Context {
+	const { ctx } = event.locals;
+	if (!ctx) throw new Error('A shop route without a shop in its address');
+	if (!may(ctx.role, ability))
+		throw new Refused(
+			'role',
+			`Only ${whoMay(ability)} can do this. You are signed in as ${ctx.role}.`
+		);
+	return ctx;
+}
+
+/** A page's data. */
+export function page<T, E extends Event>(
+	ability: Ability,
+	load: (ctx: Context, event: E) => Promise<T> | T
+) {
+	return async (event: E): Promise<T> => {
+		try {
+			return await load(contextFor(event, ability), event);
+		} catch (thrown) {
+			const { status, problems } = knownFault(thrown);
+			error(status, problems[0]!.message);
+		}
+	};
+}
+
+/** A redirect or an error of the framework passes; what we know gets its status. */
+export function knownFault(thrown: unknown) {
+	if (thrown && typeof thrown === 'object' && 'status' in thrown && !(thrown instanceof Error))
+		throw thrown;
+	return faultOf(thrown);
+}
+
+interface Failed {
+	problems: { field: string; message: string }[];
+	typed: Record<string, string | string[]>;
+}
+
+/** What a form's page gets back: nothing when the verb said where to go on to. */
+type Kept<R> = R extends { to: string } ? never : R;
+
+const goesOn = (done: unknown): done is { to: string } =>
+	typeof done === 'object' && done !== null && 'to' in done && typeof done.to === 'string';
+
+/** A form's action: parse, do once, redirect; a refusal comes back with what was typed. */
+export function action<S extends z.ZodType, R, E extends Event>(
+	ability: Ability,
+	schema: S,
+	verb: (ctx: Context, input: z.output<S>, event: E) => Promise<R>
+) {
+	return async (event: E): Promise<ActionFailure<Failed> | Kept<R>> => {
+		const typed = formObject(await event.request.formData());
+		const { idempotencyKey, ...fields } = typed;
+		let done: R;
+		try {
+			const ctx = contextFor(event, ability);
+			if (typeof idempotencyKey !== 'string')
+				throw new Refused('bad input', 'Reload the page and send the form again.');
+			const input = schema.parse(fields);
+			const hash = fingerprint(event.url.pathname + event.url.search, typedText(typed));
+			done = await once(ctx, idempotencyKey, hash, (ctx) => verb(ctx, input, event));
+		} catch (thrown) {
+			const { status, problems } = knownFault(thrown);
+			return fail(status, { problems, typed: typedText(fields) });
+		}
+		if (goesOn(done)) redirect(303, done.to);
+		return done as Kept<R>;
+	};
+}

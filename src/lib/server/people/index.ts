@@ -1,0 +1,17 @@
+// People: who signs in, which shops they belong to, what their role lets them do; the shop's settings and policy.
+// Also the doorkeeper that every route of a shop passes, and the record of what happened.
+// Not for: what a shop holds (donors, parts, prices).
+export { authHandle, SignInFailed, signIn, signOut } from './auth';
+export { action, contextFor, page } from './doorkeeper';
+export { change, changeKey, read } from './edge';
+export { acceptInvite, findInvite } from './accept-invite';
+export { inviteMember, withdrawInvite } from './invites';
+export { addKey, revokeKey } from './keys';
+export { editMember, listInvites, listMembers } from './members';
+export { fingerprint, once } from './once';
+export { record, type Happening } from './record';
+export { editPolicy, editShop, getPolicy, getPolicyRow, getShop, setSeason } from './settings';
+export { allShopIds, keyHolder, shopsOf, type Membership } from './shops';
+export { visitorAction } from './visitor';
+export { setPassword } from './persons';
+export { openAnother, signUp } from './sign-up';

@@ -1,0 +1,48 @@
+import { Refused } from '$lib/refusal';
+import { and, eq } from 'drizzle-orm';
+import { createHash } from 'node:crypto';
+import { inShop, type Context } from '../context';
+import { answered } from './tables';
+
+/** A fingerprint of what was asked for, so that a key cannot be used for something else. */
+export const fingerprint = (where: string, input: unknown): string =>
+	createHash('sha256')
+		.update(where)
+		.update('\n')
+		.update(JSON.stringify(input) ?? '')
+		.digest('base64url');
+
+/**
+ * Does a change once per key, in the same transaction as the change itself: the same key and body again
+ * gets the first answer, another body under the same key is refused.
+ */
+export const once = <T>(
+	ctx: Context,
+	key: string,
+	bodyHash: string,
+	work: (ctx: Context) => Promise<T>
+): Promise<T> =>
+	inShop(ctx, async (tx, ctx) => {
+		const mine = and(
+			eq(answered.shopId, ctx.shopId),
+			eq(answered.memberId, ctx.memberId),
+			eq(answered.key, key)
+		);
+		const [first] = await tx
+			.insert(answered)
+			.values({ shopId: ctx.shopId, memberId: ctx.memberId, key, bodyHash, at: ctx.now })
+			.onConflictDoNothing()
+			.returning({ key: answered.key });
+		if (!first) {
+			const [before] = await tx.select().from(answered).where(mine);
+			if (before?.bodyHash !== bodyHash)
+				throw new Refused('key reused', 'This key was used for another change. Send a new one.');
+			return before.answer as T;
+		}
+		const answer = await work(ctx);
+		await tx
+			.update(answered)
+			.set({ answer: answer ?? null })
+			.where(mine);
+		return answer;
+	});

@@ -1,0 +1,220 @@
+import { PHOTO_SAID } from '$lib/photos/limits';
+import { PHOTO_SIZES } from '$lib/photos/links';
+import { NotFound, Refused } from '$lib/refusal';
+import { randomBytes } from 'node:crypto';
+import { buffer } from 'node:stream/consumers';
+import { deflateSync } from 'node:zlib';
+import { eq } from 'drizzle-orm';
+import sharp from 'sharp';
+import { beforeAll, describe, expect, it } from 'vitest';
+import { testShops, type TestShop } from '../db/test-shop';
+import { inShop } from '../context';
+import { listKeys } from '../storage';
+import { cleanPhoto, deletePhoto, keepPhoto, readPhoto, restorePhoto, savePhoto } from '.';
+import { sweepPhotos } from './sweep';
+import { photo } from './tables';
+import { turns } from './turns';
+
+let ours: TestShop;
+let theirs: TestShop;
+beforeAll(async () => {
+	({ ours, theirs } = await testShops());
+});
+
+const noise = (width: number, height: number) =>
+	sharp(randomBytes(width * height * 3), { raw: { width, height, channels: 3 } });
+
+const plain = (width: number, height: number) =>
+	sharp({ create: { width, height, channels: 3, background: '#8a5a2b' } });
+
+const crc = (bytes: Buffer) => {
+	let sum = 0xffffffff;
+	for (const byte of bytes) {
+		sum ^= byte;
+		for (let bit = 0; bit < 8; bit += 1) sum = sum & 1 ? (sum >>> 1) ^ 0xedb88320 : sum >>> 1;
+	}
+	return (sum ^ 0xffffffff) >>> 0;
+};
+
+const chunk = (name: string, data: Buffer) => {
+	const head = Buffer.alloc(4);
+	head.writeUInt32BE(data.length);
+	const body = Buffer.concat([Buffer.from(name), data]);
+	const tail = Buffer.alloc(4);
+	tail.writeUInt32BE(crc(body));
+	return Buffer.concat([head, body, tail]);
+};
+
+/** A black PNG of side x side points, packed to a few kilobytes. */
+function bomb(side: number): Buffer {
+	const header = Buffer.alloc(13);
+	header.writeUInt32BE(side, 0);
+	header.writeUInt32BE(side, 4);
+	header[8] = 1;
+	const rows = Buffer.alloc((Math.ceil(side / 8) + 1) * side);
+	return Buffer.concat([
+		Buffer.from([0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a]),
+		chunk('IHDR', header),
+		chunk('IDAT', deflateSync(rows)),
+		chunk('IEND', Buffer.alloc(0))
+	]);
+}
+
+const svg = Buffer.from(
+	'<svg xmlns="http://www.w3.org/2000/svg" width="9" height="9"><rect/></svg>'
+);
+const zip = Buffer.from('504b0506000000000000000000000000000000000000', 'hex');
+
+describe('what is no photo is refused in words', () => {
+	const uploads: [string, () => Promise<Buffer> | Buffer, string][] = [
+		['an SVG', () => svg, PHOTO_SAID.kind],
+		['a zip named .jpg', () => zip, PHOTO_SAID.kind],
+		['a text', () => Buffer.from('<html>hello</html>'), PHOTO_SAID.kind],
+		['nothing', () => Buffer.alloc(0), PHOTO_SAID.kind],
+		['a GIF', () => plain(20, 20).gif().toBuffer(), PHOTO_SAID.kind],
+		['a TIFF', () => plain(20, 20).tiff().toBuffer(), PHOTO_SAID.kind],
+		['196 megapixels in a few kilobytes', () => bomb(14_000), PHOTO_SAID.pixels],
+		['26 MB', () => Buffer.alloc(26 * 1024 * 1024), PHOTO_SAID.size],
+		[
+			'half a JPEG',
+			async () => (await noise(600, 400).jpeg().toBuffer()).subarray(0, 40_000),
+			PHOTO_SAID.broken
+		]
+	];
+	it.each(uploads)('%s', async (_, make, said) => {
+		const bytes = await make();
+		const began = performance.now();
+		const thrown = await cleanPhoto(bytes).catch((fault: unknown) => fault);
+		expect(thrown).toBeInstanceOf(Refused);
+		expect(thrown).toMatchObject({ code: 'bad input', message: said });
+		expect(performance.now() - began).toBeLessThan(1000);
+	});
+});
+
+describe('a photo', () => {
+	it.each(['jpeg', 'png', 'webp', 'avif'] as const)('may be a %s', async (format) => {
+		const clean = await cleanPhoto(await plain(300, 200).toFormat(format).toBuffer());
+		expect(clean).toMatchObject({ width: 300, height: 200 });
+	});
+
+	it('comes out upright and without a byte of what the camera wrote', async () => {
+		const gps = { IFD3: { GPSLatitudeRef: 'N', GPSLatitude: '51/1 30/1 0/1' } };
+		const sent = await noise(400, 300)
+			.jpeg()
+			.withExif({ IFD0: { Make: 'Canary Camera', Copyright: 'CANARY' }, ...gps })
+			.withXmp('<x:xmpmeta xmlns:x="adobe:ns:meta/"><canary/></x:xmpmeta>')
+			.withMetadata({ orientation: 6 })
+			.toBuffer();
+		expect((await sharp(sent).metadata()).exif).toBeDefined();
+		const { sizes, width, height } = await cleanPhoto(sent);
+		expect([width, height]).toEqual([300, 400]);
+		for (const size of PHOTO_SIZES) {
+			const kept = await sharp(sizes[size]).metadata();
+			expect(kept.exif ?? kept.xmp ?? kept.iptc ?? kept.icc ?? kept.orientation).toBeUndefined();
+			expect(kept.height).toBeGreaterThan(kept.width);
+			expect(sizes[size].includes('anary')).toBe(false);
+		}
+	});
+
+	it('keeps the top at the top when its camera lay on the side', async () => {
+		const red = { create: { width: 40, height: 80, channels: 3, background: '#ff0000' } } as const;
+		const left = await sharp(red).png().toBuffer();
+		const sent = await plain(80, 80)
+			.composite([{ input: left, left: 0, top: 0 }])
+			.jpeg()
+			.withMetadata({ orientation: 6 })
+			.toBuffer();
+		const { sizes } = await cleanPhoto(sent);
+		const { data } = await sharp(sizes.full).raw().toBuffer({ resolveWithObject: true });
+		expect(data[0]).toBeGreaterThan(200);
+		expect(data[2]).toBeLessThan(60);
+		expect(data[data.length - 3]).toBeLessThan(200);
+	});
+
+	it('has sizes for screens, the smallest under 15 KB even of noise', async () => {
+		const { sizes } = await cleanPhoto(await noise(3000, 2000).jpeg({ quality: 60 }).toBuffer());
+		const widest = async (bytes: Buffer) => (await sharp(bytes).metadata()).width;
+		expect(await widest(sizes.full)).toBe(2048);
+		expect(await widest(sizes.card)).toBe(640);
+		expect(await widest(sizes.thumb)).toBeLessThanOrEqual(200);
+		expect(sizes.thumb.length).toBeLessThanOrEqual(15 * 1024);
+	});
+});
+
+it('no more than two are worked on at once', async () => {
+	const turn = turns(2);
+	let now = 0;
+	let most = 0;
+	const work = async () => {
+		most = Math.max(most, ++now);
+		await new Promise((done) => setTimeout(done, 5));
+		now -= 1;
+	};
+	await Promise.all(Array.from({ length: 9 }, () => turn(work)));
+	await expect(turn(() => Promise.reject(new Error('no')))).rejects.toThrow('no');
+	await Promise.all([turn(work), turn(work), turn(work)]);
+	expect(most).toBe(2);
+});
+
+describe('in the store', () => {
+	const keysOf = async (shop: TestShop) => {
+		const keys: string[] = [];
+		for await (const { key } of listKeys(`${shop.ctx.shopId}/`)) keys.push(key);
+		return keys;
+	};
+	const picture = () => plain(900, 600).jpeg().toBuffer();
+
+	it('three sizes stand under a fresh key, never the upload itself', async () => {
+		const sent = await picture();
+		const { id } = await savePhoto(ours.ctx, sent);
+		const keys = await keysOf(ours);
+		expect(keys.map((key) => key.split('/').at(-1)).sort()).toEqual([
+			'card.webp',
+			'full.webp',
+			'thumb.webp'
+		]);
+		for (const size of PHOTO_SIZES) {
+			const bytes = await buffer(await readPhoto(ours.ctx, id, size));
+			expect((await sharp(bytes).metadata()).format).toBe('webp');
+			expect(bytes.equals(sent)).toBe(false);
+		}
+	});
+
+	it('a photo of another shop is not there, like one that never was', async () => {
+		const { id } = await savePhoto(theirs.ctx, await picture());
+		const foreign = await readPhoto(ours.ctx, id, 'full').catch((fault: unknown) => fault);
+		const unknown = await readPhoto(ours.ctx, 999_999, 'full').catch((fault: unknown) => fault);
+		expect(foreign).toBeInstanceOf(NotFound);
+		expect(foreign).toEqual(unknown);
+		await expect(deletePhoto(ours.ctx, id)).rejects.toThrow(NotFound);
+	});
+
+	it('one that was taken away can be put back', async () => {
+		const { id } = await savePhoto(ours.ctx, await picture());
+		await deletePhoto(ours.ctx, id);
+		await expect(readPhoto(ours.ctx, id, 'card')).rejects.toThrow(NotFound);
+		await restorePhoto(ours.ctx, id);
+		(await readPhoto(ours.ctx, id, 'card')).destroy();
+	});
+
+	it('is never written to inside a transaction', async () => {
+		const sent = await picture();
+		await expect(inShop(ours.ctx, (_tx, ctx) => keepPhoto(ctx, sent))).rejects.toThrow(/before/);
+	});
+
+	it('the sweep removes what has no row after an hour, and nothing else', async () => {
+		const stray = await keepPhoto(ours.ctx, await picture());
+		const foreign = await keepPhoto(theirs.ctx, await picture());
+		const soon = { ...ours.ctx, now: new Date(Date.now() + 59 * 60_000) };
+		const later = { ...ours.ctx, now: new Date(Date.now() + 61 * 60_000) };
+		expect(await sweepPhotos(soon)).toBe(0);
+		expect(await sweepPhotos(later)).toBe(3);
+		const left = await keysOf(ours);
+		expect(left.some((key) => key.startsWith(stray.key))).toBe(false);
+		expect((await keysOf(theirs)).some((key) => key.startsWith(foreign.key))).toBe(true);
+		const rows = await inShop(ours.ctx, (tx) =>
+			tx.select().from(photo).where(eq(photo.shopId, ours.ctx.shopId))
+		);
+		expect(left).toHaveLength(rows.length * PHOTO_SIZES.length);
+	});
+});

@@ -1,0 +1,7 @@
+// Prices: what a new part or a copy costs, for a part number or for a kind on an engine, and where it was seen.
+// It keeps the list and answers which price counts for a part.
+// Not for: what a used part is worth (worth, and the verdicts of parts), what a sale brought in.
+export { editPrice, putPrice } from './put';
+export { listPrices, getPrice, type PriceFilter } from './queries';
+export { listRemoved, putBackPrice, removePrice } from './remove';
+export { pricesFor, type PriceAsk, type PriceRow } from './prices-for';

@@ -1,0 +1,104 @@
+import { engineKey, numberKey } from '$lib/codes/number';
+import { isStale, staleBefore } from '$lib/prices/stale';
+import type { PriceSort, PriceView } from '$lib/prices/view';
+import { NotFound } from '$lib/refusal';
+import { findKind, kinds, matchKinds } from '$lib/trade';
+import { and, asc, count, desc, eq, ilike, inArray, like, lt, or, sql, type SQL } from 'drizzle-orm';
+import { inShop, type Context } from '../context';
+import { getPolicy } from '../people';
+import { price } from './tables';
+import { nextAfter, placeAfter } from './page-after';
+
+export interface PriceFilter {
+	q?: string;
+	kind?: string;
+	stale?: boolean;
+	sort?: PriceSort;
+	down?: boolean;
+	limit?: number;
+	cursor?: string;
+}
+
+const byName = [...kinds].sort((a, b) => a.name.localeCompare(b.name)).map(({ id }) => id);
+
+/** What each column sorts by: always text or number, never null, so that pages join without a seam. */
+export const SORTED_BY: Record<PriceSort, { of: SQL; as: 'text' | 'bigint' }> = {
+	kind: { of: sql`coalesce(array_position(${sql.param(`{${byName.join(',')}}`)}::text[], ${price.kind}), 0)`, as: 'bigint' },
+	engine: { of: sql`${price.engineKey}`, as: 'text' },
+	number: { of: sql`${price.numberKey}`, as: 'text' },
+	new: { of: sql`${price.newCents}`, as: 'bigint' },
+	copy: { of: sql`coalesce(${price.copyCents}, 0)`, as: 'bigint' },
+	seen: { of: sql`${price.seenOn}::text`, as: 'text' }
+};
+
+const literally = (text: string) => text.replace(/[\\%_]/g, '\\$&');
+
+function wordsMatch(q: string): SQL | undefined {
+	const named = matchKinds(q).map(({ kind }) => kind.id);
+	const [engine, number] = [engineKey(q), numberKey(q)];
+	return or(
+		named.length > 0 ? inArray(price.kind, named) : undefined,
+		engine ? like(price.engineKey, `%${engine}%`) : undefined,
+		number ? like(price.numberKey, `%${number}%`) : undefined,
+		ilike(price.source, `%${literally(q)}%`)
+	);
+}
+
+const matching = (ctx: Context, filter: PriceFilter, staleDays: number) =>
+	and(
+		eq(price.shopId, ctx.shopId),
+		filter.kind ? eq(price.kind, filter.kind) : undefined,
+		filter.stale ? lt(price.seenOn, staleBefore(ctx.now, staleDays)) : undefined,
+		filter.q?.trim() ? wordsMatch(filter.q.trim()) : undefined
+	);
+
+type Row = typeof price.$inferSelect;
+
+const viewOf = (row: Row, ctx: Context, staleDays: number): PriceView => {
+	const { id, kind, engine, number, newCents, copyCents, source, seenOn, version } = row;
+	const kindName = findKind(kind)?.name ?? kind;
+	const stale = isStale(seenOn, ctx.now, staleDays);
+	return { id, kind, kindName, engine, number, newCents, copyCents, source, seenOn, stale, version };
+};
+
+/** A page of the price list, with how many there are in all. */
+export const listPrices = (
+	ctx: Context,
+	filter: PriceFilter = {}
+): Promise<{ items: PriceView[]; total: number; next: string | null }> =>
+	inShop(ctx, async (tx, ctx) => {
+		const { staleDays } = await getPolicy(ctx);
+		const { sort = 'kind', down = false } = filter;
+		const limit = Math.min(Math.max(filter.limit ?? 50, 1), 200);
+		const { of, as } = SORTED_BY[sort];
+		const where = matching(ctx, filter, staleDays);
+		const after = placeAfter(filter.cursor);
+		const beyond = after
+			? sql`(${of}, ${price.id}) ${down ? sql`<` : sql`>`} (${after.value}::${sql.raw(as)}, ${after.id}::bigint)`
+			: undefined;
+		const way = down ? desc : asc;
+		const rows = await tx
+			.select({ row: price, sorted: sql<string | number>`${of}` })
+			.from(price)
+			.where(and(where, beyond))
+			.orderBy(way(of), way(price.id))
+			.limit(limit + 1);
+		const [all] = await tx.select({ total: count() }).from(price).where(where);
+		const shown = rows.slice(0, limit);
+		const last = rows.length > limit ? shown.at(-1) : undefined;
+		return {
+			items: shown.map(({ row }) => viewOf(row, ctx, staleDays)),
+			total: all?.total ?? 0,
+			next: last ? nextAfter(last.sorted, last.row.id) : null
+		};
+	});
+
+export const getPrice = (ctx: Context, id: number): Promise<PriceView> =>
+	inShop(ctx, async (tx, ctx) => {
+		const [row] = await tx
+			.select()
+			.from(price)
+			.where(and(eq(price.shopId, ctx.shopId), eq(price.id, id)));
+		if (!row) throw new NotFound('This price is not on the list');
+		return viewOf(row, ctx, (await getPolicy(ctx)).staleDays);
+	});

@@ -1,0 +1,32 @@
+import { sql } from 'drizzle-orm';
+import { check, date, index, integer, pgTable, primaryKey, text, uniqueIndex } from 'drizzle-orm/pg-core';
+import { idColumn, shopColumn, time } from '../db/columns';
+import { shop } from '../people/tables';
+
+/** What a new part costs: for a number, or for a kind on an engine. Money is in the shop's currency. */
+export const price = pgTable(
+	'price',
+	{
+		shopId: shopColumn().references(() => shop.id),
+		id: idColumn(),
+		kind: text('kind').notNull(),
+		engine: text('engine').notNull().default(''),
+		engineKey: text('engine_key').notNull().default(''),
+		number: text('number').notNull().default(''),
+		numberKey: text('number_key').notNull().default(''),
+		newCents: integer('new_cents').notNull(),
+		copyCents: integer('copy_cents'),
+		source: text('source').notNull(),
+		seenOn: date('seen_on', { mode: 'string' }).notNull(),
+		version: integer('version').notNull().default(1),
+		changedAt: time('changed_at').notNull()
+	},
+	(t) => [
+		primaryKey({ columns: [t.shopId, t.id] }),
+		uniqueIndex('price_of').on(t.shopId, t.kind, t.engineKey, t.numberKey),
+		index('price_number').on(t.shopId, t.numberKey),
+		check('price_new', sql`${t.newCents} > 0`),
+		check('price_copy', sql`${t.copyCents} > 0`),
+		check('price_for', sql`${t.engineKey} <> '' or ${t.numberKey} <> ''`)
+	]
+);

@@ -1,0 +1,51 @@
+import { breakEven } from './break-even';
+import { gainFigures, type GainInput } from './gain-input';
+import { keepUpTo } from './keep-up-to';
+import { wholeCents } from './money';
+import { termsOf, type Terms } from './values';
+import { everCalled, waitYears } from './waiting';
+
+export interface Gain {
+	gainCents: number;
+	timing: 'when-called' | 'now';
+	keepUpTo: number | null;
+	breakEvenUsedCents: number | null;
+	waitYears: number | null;
+	everCalled: number;
+	gainPerMinute: number | null;
+	terms: Terms;
+}
+
+// a price beyond any shop is as good as none
+function payable(cents: number): number | null {
+	return cents < 1e12 ? wholeCents(cents) : null;
+}
+
+/**
+ * What keeping one part is worth to the shop against scrapping it now, and when to do the work on
+ * it. Waits for the k-th of a Poisson stream of calls; the part may be bad, may come back, and its
+ * cleaning and testing may wait until somebody calls.
+ *
+ * In: see GainInput. Out: `gainCents` and `breakEvenUsedCents` in whole cents (the lower price of
+ * the two timings; null where no price helps), `timing` of the work, `keepUpTo` units (null: no
+ * limit), `waitYears` (null: nobody calls), `everCalled` 0 to 1, `gainPerMinute` in cents for each
+ * minute spent now (null: none is), and the unrounded terms.
+ * Throws WorthError naming the field, its unit and its range.
+ * Source: Rosenfield 1985, "Salvaging of Excess Inventory", with bad parts and waiting work added.
+ */
+export function gain(input: GainInput): Gain {
+	const part = gainFigures(input);
+	const terms = termsOf(part);
+	const worth = Math.max(terms.whenCalled, terms.now) - terms.scrap;
+	const even = breakEven(part);
+	return {
+		gainCents: wholeCents(worth),
+		timing: terms.whenCalled >= terms.now ? 'when-called' : 'now',
+		keepUpTo: keepUpTo(part),
+		breakEvenUsedCents: even && payable(Math.min(even.whenCalled, even.now)),
+		waitYears: waitYears(part),
+		everCalled: everCalled(part),
+		gainPerMinute: part.minutesNow === 0 ? null : worth / part.minutesNow,
+		terms
+	};
+}

@@ -1,0 +1,2 @@
+/** Open to everybody: the process answers. */
+export const GET = () => new Response('ok');

@@ -1,0 +1,18 @@
+import { db } from '$lib/server/db';
+import { storeAnswers } from '$lib/server/storage';
+import { sql } from 'drizzle-orm';
+
+const answers = (work: Promise<unknown>) => work.then(
+	() => 'ok',
+	() => 'no answer'
+);
+
+/** Open to everybody: what the product stands on answers, or which part does not. */
+export const GET = async () => {
+	const [database, store] = await Promise.all([
+		answers(db().execute(sql`select 1`)),
+		answers(storeAnswers())
+	]);
+	const ready = database === 'ok' && store === 'ok';
+	return Response.json({ database, store }, { status: ready ? 200 : 503 });
+};

@@ -1,0 +1,28 @@
+import adapter from '@sveltejs/adapter-node';
+import { vitePreprocess } from '@sveltejs/vite-plugin-svelte';
+
+/** @type {import('@sveltejs/kit').Config} */
+export default {
+	preprocess: vitePreprocess(),
+	kit: {
+		adapter: adapter(),
+		alias: { $fixtures: 'fixtures' },
+		csp: {
+			mode: 'auto',
+			directives: {
+				'default-src': ['none'],
+				'script-src': ['self', 'wasm-unsafe-eval'],
+				// Positions on the worth line and the shelf are style attributes.
+				'style-src': ['self', 'unsafe-inline'],
+				'img-src': ['self', 'blob:', 'data:'],
+				'font-src': ['self'],
+				'connect-src': ['self'],
+				'manifest-src': ['self'],
+				'worker-src': ['self'],
+				'form-action': ['self'],
+				'base-uri': ['none'],
+				'frame-ancestors': ['none']
+			}
+		}
+	}
+};
