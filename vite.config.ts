@@ -10,7 +10,7 @@ export default defineConfig({
 				extends: true,
 				test: {
 					name: 'pure',
-					include: ['src/lib/**/*.test.ts', 'tests/rooms.test.ts', 'src/run/**/*.test.js'],
+					include: ['src/lib/**/*.test.ts', 'tests/*.test.ts', 'src/run/**/*.test.js'],
 					exclude: ['src/lib/server/**'],
 					environment: 'node'
 				}

@@ -1,4 +1,5 @@
 import type { Context } from '$lib/server/context';
+import type { Db } from '$lib/server/db';
 import type { Role } from '$lib/people/role';
 import type { Session } from '@auth/sveltekit';
 
@@ -9,6 +10,8 @@ declare global {
 			id?: string;
 		}
 		interface Locals {
+			/** For what is asked before a shop is known; inside one, the context carries it. */
+			db: Db;
 			auth(): Promise<Session | null>;
 			/** Who is signed in, if anybody. */
 			person: { id: string; name: string; email: string } | null;

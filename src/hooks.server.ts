@@ -31,6 +31,7 @@ export const init: ServerInit = async () => {
 
 /** Who is it: a person with a session, or a script with a key. */
 const identify: Handle = async ({ event, resolve }) => {
+	event.locals.db = db();
 	event.locals.person = null;
 	event.locals.ctx = null;
 	event.locals.shops = [];

@@ -5,7 +5,6 @@ export const AREAS = [
 	...['find', 'wants', 'offers', 'ledger']
 ];
 export const PLUMBING = ['context', 'env', 'log', 'db', 'queue', 'mail', 'storage', 'http'];
-export const READS_EVERY_TABLE = ['find', 'ledger'];
 
 export interface Back {
 	what: 'back';

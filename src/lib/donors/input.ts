@@ -71,3 +71,5 @@ export const CauseForm = z.object({
 	sureness,
 	version: z.coerce.number().int()
 });
+
+export const PhotoRef = z.object({ id: z.coerce.number().int().positive() });

@@ -3,7 +3,8 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { dayIn, sayDay } from './day';
 import { afterMove, canPull, gatesShut, noMoveSaid, replay, type DonorMove } from './state';
-import { todoOf, WANTED_SHOTS } from './todo';
+import { WANTED_SHOTS } from './shots';
+import { todoOf } from './todo';
 import { DONOR_STATES, type DonorState } from './words';
 
 const TODAY = '2026-03-10';

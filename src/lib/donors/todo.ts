@@ -1,31 +1,11 @@
 import { gatesShut, type GateDonor, type GateRelease } from './state';
+import { WANTED_SHOTS, SHOT_SAID } from './shots';
 import type { DonorShot } from './words';
 
 export interface Todo {
 	id: 'cause' | 'release' | 'hold' | 'safe' | 'photos';
 	said: string;
 }
-
-/** The six views that say later what came in. */
-export const WANTED_SHOTS = [
-	'front',
-	'back',
-	'label',
-	'pto',
-	'carburetor side',
-	'failure'
-] as const;
-
-export const SHOT_SAID: Record<DonorShot, string> = {
-	front: 'front',
-	back: 'back',
-	label: 'label or plate',
-	pto: 'PTO end',
-	'carburetor side': 'carburetor side',
-	failure: 'inside, or the failure',
-	box: 'the box',
-	other: 'something else'
-};
 
 const SHORT = {
 	cause: 'Name the cause of death',

@@ -16,7 +16,7 @@ export interface DonorItem {
 	sureness: Sureness | null;
 	offMachine: string;
 	takenInAt: string;
-	parts: number;
+	partCount: number;
 	photo: PhotoLinks | null;
 	todo: Todo[];
 }
@@ -74,6 +74,6 @@ export interface DonorView extends DonorItem {
 	photos: DonorPhotoView[];
 	release: ReleaseView | null;
 	gates: Gate[];
-	partList: DonorPart[];
+	parts: DonorPart[];
 	events: DonorEvent[];
 }

@@ -27,7 +27,9 @@ export const chanceOf = (subject: VerdictSubject, policy: Policy): ChanceGood =>
 
 /** Whether its bench test is done: what was left to clean and test has been. */
 export function isTested(subject: VerdictSubject): boolean {
-	const last = subject.proofs.findLast(({ how, passed }) => !passed || how.startsWith('bench test'));
+	const last = subject.proofs.findLast(
+		({ how, passed }) => !passed || how.startsWith('bench test')
+	);
 	return last?.passed ?? false;
 }
 
@@ -58,7 +60,10 @@ export const scrapKgCents = (scrapClass: string, policy: Policy): number =>
 	policy.scrapKgCents[scrapClass] ?? scrapCentsPerGram(scrapClass) * 1000;
 
 /** The yearly cost of the room that it takes: by litres where both are known, else by its size. */
-export function shelfCents(subject: VerdictSubject, policy: Policy): { cents: number; by: 'bin' | 'size' } {
+export function shelfCents(
+	subject: VerdictSubject,
+	policy: Policy
+): { cents: number; by: 'bin' | 'size' } {
 	const { bin, litres } = subject;
 	if (bin?.yearlyCostCents != null && bin.litres && litres)
 		return { cents: Math.min(1, litres / bin.litres) * bin.yearlyCostCents, by: 'bin' };

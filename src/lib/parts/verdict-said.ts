@@ -11,7 +11,10 @@ export function gainSaid({ gainCents }: Pick<Verdict, 'gainCents'>, say: Say): s
 }
 
 /** When the cleaning and testing pays; null for a part that is let go or has nothing left to do. */
-export function timingSaid({ verdict, timing }: Pick<Verdict, 'verdict' | 'timing'>): string | null {
+export function timingSaid({
+	verdict,
+	timing
+}: Pick<Verdict, 'verdict' | 'timing'>): string | null {
 	if (timing === null || (verdict !== 'keep' && verdict !== 'close call')) return null;
 	return timing === 'now' ? 'Clean and test it today.' : 'Clean and test it when somebody calls.';
 }
@@ -20,7 +23,9 @@ export function timingSaid({ verdict, timing }: Pick<Verdict, 'verdict' | 'timin
 export function keepSaid({ gainCents, keepUpTo, have }: Verdict): string | null {
 	if (gainCents === null) return null;
 	if (keepUpTo === null) return `Keep all that come in: you have ${have}.`;
-	return keepUpTo === 0 ? `Keep none: you have ${have}.` : `Keep up to ${keepUpTo}: you have ${have}.`;
+	return keepUpTo === 0
+		? `Keep none: you have ${have}.`
+		: `Keep up to ${keepUpTo}: you have ${have}.`;
 }
 
 /** From which price of a new one keeping pays. */
@@ -64,7 +69,10 @@ export function remarks(verdict: Verdict, say: Say): string[] {
 const plain = (digits: number) => new Intl.NumberFormat('en-US', { maximumFractionDigits: digits });
 
 /** A figure of the sum for people to read. */
-export function termSaid({ value, unit }: Pick<VerdictTerm, 'value' | 'unit'>, currency: string): string {
+export function termSaid(
+	{ value, unit }: Pick<VerdictTerm, 'value' | 'unit'>,
+	currency: string
+): string {
 	const cents = () => money(Math.round(value), currency);
 	const said: Record<TermUnit, () => string> = {
 		cents,

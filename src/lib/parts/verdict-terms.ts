@@ -64,7 +64,13 @@ function priceTerms({ subject, policy, grade, used }: Basis): VerdictTerm[] {
 		);
 	const capped = used.cappedBy ? 'held down by the copy, ' : '';
 	const least = used.belowLeast ? '; under the least price of the counter' : '';
-	rows.push({ said: 'Asked price', value: used.usedCents, unit: 'cents', source: `${capped}rounded to the step${least}`, sum: true });
+	rows.push({
+		said: 'Asked price',
+		value: used.usedCents,
+		unit: 'cents',
+		source: `${capped}rounded to the step${least}`,
+		sum: true
+	});
 	return rows;
 }
 
@@ -81,17 +87,33 @@ function goodTerms(basis: Basis): VerdictTerm[] {
 			unit: 'share',
 			source: `${steps} (${from(policy, (p) => [p.chances, p.proofOdds])})`
 		},
-		{ said: 'Comes back all the same', value: input.comeBack, unit: 'share', source: fromKind(basis, 'comeBack') },
+		{
+			said: 'Comes back all the same',
+			value: input.comeBack,
+			unit: 'share',
+			source: fromKind(basis, 'comeBack')
+		},
 		{
 			said: 'A come-back costs',
 			value: input.comeBackCents,
 			unit: 'cents',
 			source: `${figures.refitMinutes} minutes for the second fitting, ${fromKind(basis, 'refitMinutes')}, at the labour rate`
 		},
-		{ said: 'Kit with every sale', value: input.kitCents ?? 0, unit: 'cents', source: fromKind(basis, 'kitCents') }
+		{
+			said: 'Kit with every sale',
+			value: input.kitCents ?? 0,
+			unit: 'cents',
+			source: fromKind(basis, 'kitCents')
+		}
 	];
 	if (basis.used)
-		rows.push({ said: 'One answered call brings, when it is good', value: gain.terms.sale, unit: 'cents', source: 'asked price less come-backs and kit', sum: true });
+		rows.push({
+			said: 'One answered call brings, when it is good',
+			value: gain.terms.sale,
+			unit: 'cents',
+			source: 'asked price less come-backs and kit',
+			sum: true
+		});
 	return rows;
 }
 
@@ -105,14 +127,27 @@ function waitTerms(basis: Basis): VerdictTerm[] {
 	const ages = kind(subject.kind).ages;
 	const dying = from(policy, (p) => (ages ? p.dyingRateAgeing : p.dyingRate));
 	const rows: VerdictTerm[] = [
-		{ said: 'Calls for it', value: input.callsPerYear, unit: 'a year', source: fromKind(basis, 'callsPerYear') + family },
+		{
+			said: 'Calls for it',
+			value: input.callsPerYear,
+			unit: 'a year',
+			source: fromKind(basis, 'callsPerYear') + family
+		},
 		{
 			said: 'Its place in the queue',
 			value: input.place,
 			unit: 'count',
-			source: input.place === 1 ? 'nothing equal or better stands before it' : 'equal or better ones on the shelf go first'
+			source:
+				input.place === 1
+					? 'nothing equal or better stands before it'
+					: 'equal or better ones on the shelf go first'
 		},
-		{ said: 'Money costs', value: policy.moneyRate, unit: 'share a year', source: from(policy, (p) => p.moneyRate) },
+		{
+			said: 'Money costs',
+			value: policy.moneyRate,
+			unit: 'share a year',
+			source: from(policy, (p) => p.moneyRate)
+		},
 		{
 			said: 'Becomes unsellable',
 			value: dyingShare(subject.kind, policy),
@@ -121,8 +156,19 @@ function waitTerms(basis: Basis): VerdictTerm[] {
 		}
 	];
 	if (subject.waiting)
-		rows.push({ said: 'Somebody waits and takes it', value: input.waiting ?? 0, unit: 'share', source: from(policy, (p) => p.waitingChance) });
-	rows.push({ said: 'A call that comes in time is worth, of its full worth', value: gain.terms.reach, unit: 'share', source: 'from the calls, the place and the two rates above', sum: true });
+		rows.push({
+			said: 'Somebody waits and takes it',
+			value: input.waiting ?? 0,
+			unit: 'share',
+			source: from(policy, (p) => p.waitingChance)
+		});
+	rows.push({
+		said: 'A call that comes in time is worth, of its full worth',
+		value: gain.terms.reach,
+		unit: 'share',
+		source: 'from the calls, the place and the two rates above',
+		sum: true
+	});
 	return rows;
 }
 
@@ -142,14 +188,25 @@ function keepTerms(basis: Basis): VerdictTerm[] {
 					? "its share of the bin's yearly cost"
 					: `size ${figures.size}, ${from(policy, (p) => p.shelfCents[figures.size])}`
 		},
-		{ said: 'Weighs', value: subject.massGrams ?? figures.massGrams, unit: 'grams', source: weighed },
+		{
+			said: 'Weighs',
+			value: subject.massGrams ?? figures.massGrams,
+			unit: 'grams',
+			source: weighed
+		},
 		{
 			said: `Scrap: ${findScrapClass(scrapClass)?.said ?? scrapClass}`,
 			value: scrapKgCents(scrapClass, policy),
 			unit: 'cents a kilogram',
 			source: policy.scrapKgCents[scrapClass] === undefined ? 'the usual middle' : OWN
 		},
-		{ said: 'Scrap value now', value: worked.input.scrapCents, unit: 'cents', source: 'weight times the yard’s price', sum: true }
+		{
+			said: 'Scrap value now',
+			value: worked.input.scrapCents,
+			unit: 'cents',
+			source: 'weight times the yard’s price',
+			sum: true
+		}
 	];
 }
 
@@ -190,12 +247,23 @@ function gainTerms({ subject, used, worked }: Basis): VerdictTerm[] {
 	const keeps = kind(subject.kind).cleanKeeps;
 	const cents = 'cents' as const;
 	const rows: VerdictTerm[] = [
-		{ said: 'Kept, work done when somebody calls', value: whenCalled, unit: cents, source: keeps ? '' : 'cleaning does not keep on this kind' }
+		{
+			said: 'Kept, work done when somebody calls',
+			value: whenCalled,
+			unit: cents,
+			source: keeps ? '' : 'cleaning does not keep on this kind'
+		}
 	];
 	if (keeps) rows.push({ said: 'Kept, work done today', value: now, unit: cents, source: '' });
 	rows.push(
 		{ said: 'Scrapped now', value: worked.input.scrapCents, unit: cents, source: '' },
-		{ said: 'Gain over scrapping it now', value: worked.gain.gainCents, unit: cents, source: 'the better of keeping, less the scrap', sum: true }
+		{
+			said: 'Gain over scrapping it now',
+			value: worked.gain.gainCents,
+			unit: cents,
+			source: 'the better of keeping, less the scrap',
+			sum: true
+		}
 	);
 	return rows;
 }

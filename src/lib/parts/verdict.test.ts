@@ -9,7 +9,13 @@ import { gainInput, isTested, priceAt } from './verdict-inputs';
 import { verdictOf } from './verdict';
 import type { VerdictSubject } from './verdict-view';
 
-const PRICE = { newCents: 10000, copyCents: null, source: 'Counter book', seenOn: '2026-03-03', stale: false };
+const PRICE = {
+	newCents: 10000,
+	copyCents: null,
+	source: 'Counter book',
+	seenOn: '2026-03-03',
+	stale: false
+};
 
 const subject = (over: Partial<VerdictSubject> = {}): VerdictSubject => ({
 	kind: 'coil',
@@ -30,8 +36,11 @@ const subject = (over: Partial<VerdictSubject> = {}): VerdictSubject => ({
 	...over
 });
 
-const verdict = (over: Partial<VerdictSubject> = {}, policy: Policy = DEFAULT_POLICY, season: Season = 'normal') =>
-	verdictOf(subject(over), policy, season);
+const verdict = (
+	over: Partial<VerdictSubject> = {},
+	policy: Policy = DEFAULT_POLICY,
+	season: Season = 'normal'
+) => verdictOf(subject(over), policy, season);
 
 const demoSubject = (part: DemoPart): VerdictSubject => {
 	const donor = demoDonors.find(({ number }) => number === part.donor)!;
@@ -52,7 +61,9 @@ const demoSubject = (part: DemoPart): VerdictSubject => {
  */
 describe('the demo shop comes out as a mechanic would expect', () => {
 	const counted = (season: Season) => {
-		const words = demoParts.map((part) => verdictOf(demoSubject(part), DEFAULT_POLICY, season).verdict);
+		const words = demoParts.map(
+			(part) => verdictOf(demoSubject(part), DEFAULT_POLICY, season).verdict
+		);
 		return ['keep', 'close call', 'let it go', 'never', 'needs a price'].map(
 			(word) => words.filter((each) => each === word).length
 		);
@@ -81,9 +92,18 @@ describe('the demo shop comes out as a mechanic would expect', () => {
 
 	it('cheap carburetors with a copy go, flywheels of an overspeed engine never stay, the dear and good are kept', () => {
 		const of = (oldId: string) =>
-			verdictOf(demoSubject(demoParts.find((part) => part.oldId === oldId)!), DEFAULT_POLICY, 'normal').verdict;
+			verdictOf(
+				demoSubject(demoParts.find((part) => part.oldId === oldId)!),
+				DEFAULT_POLICY,
+				'normal'
+			).verdict;
 		expect([of('P001'), of('P010'), of('P051')]).toEqual(['let it go', 'let it go', 'let it go']);
 		expect(of('P050')).toBe('never');
-		expect([of('P040'), of('P017'), of('P031'), of('P042')]).toEqual(['keep', 'keep', 'keep', 'keep']);
+		expect([of('P040'), of('P017'), of('P031'), of('P042')]).toEqual([
+			'keep',
+			'keep',
+			'keep',
+			'keep'
+		]);
 	});
 });

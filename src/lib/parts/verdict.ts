@@ -2,7 +2,14 @@ import type { Policy } from '$lib/people/policy';
 import type { Season } from '$lib/people/settings';
 import { causeSaid, chanceLevel, kind, whyChance, type ChanceGood } from '$lib/trade';
 import { gain, verdictWord, type Gain, type GainInput, type VerdictWord } from '$lib/worth';
-import { chanceOf, gainInput, isTested, onlyWhenCalled, priceAt, pricedGrade } from './verdict-inputs';
+import {
+	chanceOf,
+	gainInput,
+	isTested,
+	onlyWhenCalled,
+	priceAt,
+	pricedGrade
+} from './verdict-inputs';
 import { verdictTerms } from './verdict-terms';
 import type { Verdict, VerdictPrice, VerdictSubject } from './verdict-view';
 import type { Grade } from './words';
@@ -137,7 +144,15 @@ export function verdictOf(subject: VerdictSubject, policy: Policy, season: Seaso
 	const worked = work(subject, policy, season, 0);
 	const base = { ...UNPRICED, ...common(subject, grade, worked, policy), reason };
 	if (reason)
-		return { ...base, verdict: 'never', rough: null, breakEvenUsedCents: null, breakEvenNewCents: null, copyBinds: false, terms: [] };
+		return {
+			...base,
+			verdict: 'never',
+			rough: null,
+			breakEvenUsedCents: null,
+			breakEvenNewCents: null,
+			copyBinds: false,
+			terms: []
+		};
 	return {
 		...base,
 		verdict: 'needs a price',

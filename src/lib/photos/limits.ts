@@ -10,3 +10,5 @@ export const PHOTO_SAID = {
 	heic: 'This is a HEIC photo. Set the camera to JPEG, or choose a JPEG, PNG, WebP or AVIF.',
 	broken: 'This photo breaks off in the middle. Take it again or choose another.'
 } as const;
+
+export const PHOTO_NONE = 'Choose a photo first.';

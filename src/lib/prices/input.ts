@@ -1,7 +1,7 @@
 import { engineKey, numberKey } from '$lib/codes/number';
 import { isKindId } from '$lib/trade';
 import { z } from 'zod';
-import { inCents, typedMoney } from './typed-money';
+import { inCents, typedMoney } from '$lib/people/typed-money';
 
 const words = (what: string, most: number) =>
 	z

@@ -1,4 +1,3 @@
-import { db } from '$lib/server/db';
 import { storeAnswers } from '$lib/server/storage';
 import { sql } from 'drizzle-orm';
 
@@ -8,9 +7,9 @@ const answers = (work: Promise<unknown>) => work.then(
 );
 
 /** Open to everybody: what the product stands on answers, or which part does not. */
-export const GET = async () => {
+export const GET = async ({ locals }) => {
 	const [database, store] = await Promise.all([
-		answers(db().execute(sql`select 1`)),
+		answers(locals.db.execute(sql`select 1`)),
 		answers(storeAnswers())
 	]);
 	const ready = database === 'ok' && store === 'ok';

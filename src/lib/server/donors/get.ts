@@ -1,6 +1,6 @@
 import { dayIn } from '$lib/donors/day';
 import { gatesShut } from '$lib/donors/state';
-import { SHOT_SAID } from '$lib/donors/todo';
+import { SHOT_SAID } from '$lib/donors/shots';
 import type { DonorPhotoView, DonorView, ReleaseView } from '$lib/donors/view';
 import { may } from '$lib/people/role';
 import { photoLinks } from '$lib/photos/links';
@@ -65,7 +65,7 @@ export const getDonor = (ctx: Context, ref: string): Promise<DonorView> =>
 			photos: photoViews(near, item.engine, slug),
 			release: release && (await releaseView(tx, ctx, release)),
 			gates: gatesShut(row, release, today),
-			partList: await donorParts(tx, ctx, row.id),
+			parts: await donorParts(tx, ctx, row.id),
 			events: await donorEvents(tx, ctx, row.id)
 		};
 	});

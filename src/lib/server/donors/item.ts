@@ -32,7 +32,7 @@ export function donorItem(row: DonorRow, near: Around, slug: string, today: stri
 		sureness: row.sureness,
 		offMachine: row.offMachine,
 		takenInAt: row.takenInAt.toISOString(),
-		parts: near.parts.get(row.id) ?? 0,
+		partCount: near.parts.get(row.id) ?? 0,
 		photo: first ? photoLinks(slug, first.id) : null,
 		todo: todoOf(row, release, shots, today)
 	};

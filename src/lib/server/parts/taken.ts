@@ -3,6 +3,7 @@ import { and, arrayOverlaps, asc, desc, eq, inArray, ne, or, sql } from 'drizzle
 import { bin } from '../bins/tables';
 import type { Context } from '../context';
 import type { Tx } from '../db';
+import { box, donor } from '../donors/tables';
 import { getShop } from '../people';
 import { event, member } from '../people/tables';
 import type { PartRow } from './row';
@@ -38,9 +39,15 @@ export async function nextLike(tx: Tx, ctx: Context, row: PartRow) {
 	);
 	if (!same) return null;
 	const [found] = await tx
-		.select({ id: part.id, tag: part.tag, bin: bin.address })
+		.select({
+			id: part.id,
+			tag: part.tag,
+			place: sql<string | null>`coalesce(${bin.address}, 'the box of D' || ${donor.number})`
+		})
 		.from(part)
 		.leftJoin(bin, and(eq(bin.shopId, part.shopId), eq(bin.id, part.binId)))
+		.leftJoin(box, and(eq(box.shopId, part.shopId), eq(box.id, part.boxId)))
+		.leftJoin(donor, and(eq(donor.shopId, box.shopId), eq(donor.id, box.donorId)))
 		.where(
 			and(
 				eq(part.shopId, ctx.shopId),
@@ -57,11 +64,9 @@ export async function nextLike(tx: Tx, ctx: Context, row: PartRow) {
 
 /** Where a part that cannot be had went: by whom, since when, and the next one like it. */
 export async function takenWords(tx: Tx, ctx: Context, row: PartRow): Promise<string> {
-	const [{ at, by }, { timeZone }, next] = [
-		await since(tx, ctx, row),
-		await getShop(ctx),
-		await nextLike(tx, ctx, row)
-	];
+	const { at, by } = await since(tx, ctx, row);
+	const { timeZone } = await getShop(ctx);
+	const next = await nextLike(tx, ctx, row);
 	const day = (moment: Date) => date(moment, timeZone);
 	const who = `by ${by} since ${day(at)}`;
 	const said: Partial<Record<PartRow['state'], string>> = {
@@ -72,6 +77,6 @@ export async function takenWords(tx: Tx, ctx: Context, row: PartRow): Promise<st
 		pulled: `Not held for anybody, ${who}.`,
 		shelved: `On the shelf, put there ${who}.`
 	};
-	const like = next ? ` Next like it: ${next.tag}${next.bin ? ` in ${next.bin}` : ''}.` : '';
+	const like = next ? ` Next like it: ${next.tag}${next.place ? ` in ${next.place}` : ''}.` : '';
 	return `${said[row.state] ?? `In the red bin, ${who}.`}${like}`;
 }

@@ -80,7 +80,11 @@ export const partVerdicts = (
 		const rows = await rowsOf(tx, ctx, partIds);
 		const proofs = await proofsOf(tx, ctx, partIds);
 		const queue = (await queueFor(tx, ctx, rows)).map(queued);
-		const prices = await pricesFor(tx, ctx, rows.map((row) => ({ ...row, key: String(row.id) })));
+		const prices = await pricesFor(
+			tx,
+			ctx,
+			rows.map((row) => ({ ...row, key: String(row.id) }))
+		);
 		for (const row of rows) {
 			const price = priceOf(prices.get(String(row.id)), ctx, policy);
 			const subject: VerdictSubject = {
@@ -114,7 +118,13 @@ export const kindVerdicts = (
 		const asked = kindIds.map((kind) => ({ key: kind, kind, engineKey, numberKeys: [] }));
 		const queue = (await queueFor(tx, ctx, asked)).map(queued);
 		const prices = await pricesFor(tx, ctx, asked);
-		const place = { id: LAST, pulledAt: LAST, grade: 'untested', state: 'pulled', inRedBin: false } as const;
+		const place = {
+			id: LAST,
+			pulledAt: LAST,
+			grade: 'untested',
+			state: 'pulled',
+			inRedBin: false
+		} as const;
 		return new Map(
 			asked.map((one) => {
 				const price = priceOf(prices.get(one.key), ctx, policy);

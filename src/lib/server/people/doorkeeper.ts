@@ -1,10 +1,11 @@
-import { may, whoMay, type Ability } from '$lib/people/role';
+import type { Ability } from '$lib/people/role';
 import { Refused } from '$lib/refusal';
 import { error, fail, redirect, type ActionFailure, type RequestEvent } from '@sveltejs/kit';
 import type { z } from 'zod';
 import type { Context } from '../context';
 import { faultOf } from '../http/fault';
 import { formObject, typedText } from '../http/form';
+import { allow } from './allow';
 import { fingerprint, once } from './once';
 
 export type Event = RequestEvent;
@@ -13,11 +14,7 @@ export type Event = RequestEvent;
 export function contextFor(event: Event, ability: Ability): Context {
 	const { ctx } = event.locals;
 	if (!ctx) throw new Error('A shop route without a shop in its address');
-	if (!may(ctx.role, ability))
-		throw new Refused(
-			'role',
-			`Only ${whoMay(ability)} can do this. You are signed in as ${ctx.role}.`
-		);
+	allow(ctx, ability);
 	return ctx;
 }
 

@@ -1,6 +1,7 @@
 // People: who signs in, which shops they belong to, what their role lets them do; the shop's settings and policy.
 // Also the doorkeeper that every route of a shop passes, and the record of what happened.
 // Not for: what a shop holds (donors, parts, prices).
+export { allow } from './allow';
 export { authHandle, SignInFailed, signIn, signOut } from './auth';
 export { action, contextFor, page } from './doorkeeper';
 export { change, changeKey, read } from './edge';

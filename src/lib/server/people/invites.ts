@@ -2,6 +2,7 @@ import type { InviteInput } from '$lib/people/input';
 import { NotFound, Refused } from '$lib/refusal';
 import { and, eq, isNull } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
+import { allow } from './allow';
 import { enqueue } from '../queue/enqueue';
 import { newToken, tokenHash } from './hash';
 import { record } from './record';
@@ -12,6 +13,7 @@ const DAYS_OPEN = 7;
 /** Invites an address; the letter leaves only if the row does. */
 export const inviteMember = (ctx: Context, input: InviteInput): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'run');
 		const [already] = await tx
 			.select({ name: member.name })
 			.from(member)
@@ -49,6 +51,7 @@ export const inviteMember = (ctx: Context, input: InviteInput): Promise<void> =>
 
 export const withdrawInvite = (ctx: Context, id: number): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'run');
 		const [row] = await tx
 			.update(invite)
 			.set({ withdrawnAt: ctx.now })

@@ -2,6 +2,7 @@ import type { Role } from '$lib/people/role';
 import { NotFound } from '$lib/refusal';
 import { and, eq, isNull } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
+import { allow } from './allow';
 import { newToken, tokenHash } from './hash';
 import { record } from './record';
 import { apiKey, member } from './tables';
@@ -12,6 +13,7 @@ export const addKey = (
 	input: { name: string; role: Role }
 ): Promise<{ key: string }> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'run');
 		const key = `ep_${newToken()}`;
 		const [holder] = await tx
 			.insert(member)
@@ -34,6 +36,7 @@ export const addKey = (
 
 export const revokeKey = (ctx: Context, id: number): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'run');
 		const [row] = await tx
 			.update(apiKey)
 			.set({ revokedAt: ctx.now })

@@ -3,6 +3,7 @@ import type { MemberRow, OpenInvite } from '$lib/people/view';
 import { NotFound, Refused } from '$lib/refusal';
 import { and, asc, eq, isNull } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
+import { allow } from './allow';
 import type { Tx } from '../db';
 import { record } from './record';
 import { apiKey, invite, member, person } from './tables';
@@ -60,6 +61,7 @@ async function otherOwners(tx: Tx, ctx: Context, but: number): Promise<number> {
 /** Changes a member's role or shuts them out; it acts on their next request. */
 export const editMember = (ctx: Context, input: MemberEdit): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'run');
 		const others = await otherOwners(tx, ctx, input.memberId);
 		const mine = and(eq(member.shopId, ctx.shopId), eq(member.id, input.memberId));
 		const [row] = await tx.select().from(member).where(mine).for('update');

@@ -4,6 +4,7 @@ import type { Season, ShopSettings } from '$lib/people/settings';
 import { NotFound, Refused } from '$lib/refusal';
 import { eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
+import { allow } from './allow';
 import { record } from './record';
 import { policy, shop } from './tables';
 
@@ -18,6 +19,7 @@ export const getShop = (ctx: Context): Promise<ShopSettings> =>
 /** Changes the settings; refused when somebody saved in between, with both values said. */
 export const editShop = (ctx: Context, input: ShopEdit): Promise<ShopSettings> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'run');
 		const [now] = await tx.select().from(shop).where(eq(shop.id, ctx.shopId)).for('update');
 		if (!now) throw new NotFound();
 		if (now.version !== input.version)
@@ -36,6 +38,7 @@ export const editShop = (ctx: Context, input: ShopEdit): Promise<ShopSettings> =
 
 export const setSeason = (ctx: Context, season: Season): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'run');
 		const [row] = await tx.select().from(shop).where(eq(shop.id, ctx.shopId)).for('update');
 		if (!row) throw new NotFound();
 		await tx
@@ -68,6 +71,7 @@ export const editPolicy = (
 	input: { own: Partial<Policy>; version: number }
 ): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'run');
 		const checked = withDefaults(input.own);
 		await tx.select().from(shop).where(eq(shop.id, ctx.shopId)).for('update');
 		const { version, own: before } = await getPolicyRow(ctx);

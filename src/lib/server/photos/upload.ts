@@ -19,17 +19,15 @@ async function bytesOf(file: File): Promise<Buffer> {
 const photosIn = (form: FormData, field: string): File[] =>
 	form.getAll(field).filter((value): value is File => value instanceof File && value.size > 0);
 
-type Done = { to: string } | Record<string, unknown> | void;
-
 /**
  * A form's action with photos in one of its fields: they are cleaned and stored first, then the verb runs
  * in its transaction. What the store keeps for a form that was refused is swept within the hour.
  */
-export function actionWithPhotos<S extends z.ZodType, E extends Event>(
+export function actionWithPhotos<S extends z.ZodType, R, E extends Event>(
 	ability: Ability,
 	schema: S,
 	field: string,
-	verb: (ctx: Context, input: z.output<S>, kept: KeptPhoto[], event: E) => Promise<Done>
+	verb: (ctx: Context, input: z.output<S>, kept: KeptPhoto[], event: E) => Promise<R>
 ) {
 	return async (event: E) => {
 		let kept: KeptPhoto[] = [];
@@ -41,7 +39,7 @@ export function actionWithPhotos<S extends z.ZodType, E extends Event>(
 		} catch (thrown) {
 			refused = thrown;
 		}
-		const run = action<S, E>(ability, schema, async (ctx, input, event) => {
+		const run = action(ability, schema, async (ctx, input: z.output<S>, event: E) => {
 			if (refused) throw refused;
 			return verb(ctx, input, kept, event);
 		});

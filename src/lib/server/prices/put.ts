@@ -18,7 +18,11 @@ const DAY = 86_400_000;
 
 function rowOf(ctx: Context, input: PriceInput) {
 	if (Date.parse(input.seenOn) > ctx.now.getTime() + DAY)
-		throw new Refused('bad input', 'Enter the day you saw the price: this one lies ahead', 'seenOn');
+		throw new Refused(
+			'bad input',
+			'Enter the day you saw the price: this one lies ahead',
+			'seenOn'
+		);
 	const { kind, engine = '', number = '', newCents, copyCents = null, source, seenOn } = input;
 	return {
 		kind,
@@ -87,7 +91,8 @@ export const putPrice = (ctx: Context, input: PriceInput): Promise<PriceView> =>
 			return getPrice(ctx, added.id);
 		}
 		const [before] = await tx.select().from(price).where(sameAs(ctx, values)).for('update');
-		if (!before) throw new Refused('changed', 'This price was taken off the list just now. Save again.');
+		if (!before)
+			throw new Refused('changed', 'This price was taken off the list just now. Save again.');
 		await refuseChanged(ctx, before, values, input.version);
 		return write(tx, ctx, before, values);
 	});
@@ -103,7 +108,10 @@ export const editPrice = (ctx: Context, id: number, input: PriceInput): Promise<
 			.for('update');
 		if (!before) throw new NotFound('This price is not on the list any more');
 		await refuseChanged(ctx, before, values, input.version);
-		const [twin] = await tx.select().from(price).where(and(sameAs(ctx, values), ne(price.id, id)));
+		const [twin] = await tx
+			.select()
+			.from(price)
+			.where(and(sameAs(ctx, values), ne(price.id, id)));
 		if (twin)
 			throw new Refused(
 				'taken',

@@ -3,7 +3,21 @@ import { isStale, staleBefore } from '$lib/prices/stale';
 import type { PriceSort, PriceView } from '$lib/prices/view';
 import { NotFound } from '$lib/refusal';
 import { findKind, kinds, matchKinds } from '$lib/trade';
-import { and, asc, count, desc, eq, ilike, inArray, like, lt, or, sql, type SQL } from 'drizzle-orm';
+import {
+	and,
+	asc,
+	count,
+	desc,
+	eq,
+	ilike,
+	inArray,
+	like,
+	lt,
+	ne,
+	or,
+	sql,
+	type SQL
+} from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import { getPolicy } from '../people';
 import { price } from './tables';
@@ -23,7 +37,10 @@ const byName = [...kinds].sort((a, b) => a.name.localeCompare(b.name)).map(({ id
 
 /** What each column sorts by: always text or number, never null, so that pages join without a seam. */
 export const SORTED_BY: Record<PriceSort, { of: SQL; as: 'text' | 'bigint' }> = {
-	kind: { of: sql`coalesce(array_position(${sql.param(`{${byName.join(',')}}`)}::text[], ${price.kind}), 0)`, as: 'bigint' },
+	kind: {
+		of: sql`coalesce(array_position(${sql.param(`{${byName.join(',')}}`)}::text[], ${price.kind}), 0)`,
+		as: 'bigint'
+	},
 	engine: { of: sql`${price.engineKey}`, as: 'text' },
 	number: { of: sql`${price.numberKey}`, as: 'text' },
 	new: { of: sql`${price.newCents}`, as: 'bigint' },
@@ -58,7 +75,19 @@ const viewOf = (row: Row, ctx: Context, staleDays: number): PriceView => {
 	const { id, kind, engine, number, newCents, copyCents, source, seenOn, version } = row;
 	const kindName = findKind(kind)?.name ?? kind;
 	const stale = isStale(seenOn, ctx.now, staleDays);
-	return { id, kind, kindName, engine, number, newCents, copyCents, source, seenOn, stale, version };
+	return {
+		id,
+		kind,
+		kindName,
+		engine,
+		number,
+		newCents,
+		copyCents,
+		source,
+		seenOn,
+		stale,
+		version
+	};
 };
 
 /** A page of the price list, with how many there are in all. */
@@ -101,4 +130,16 @@ export const getPrice = (ctx: Context, id: number): Promise<PriceView> =>
 			.where(and(eq(price.shopId, ctx.shopId), eq(price.id, id)));
 		if (!row) throw new NotFound('This price is not on the list');
 		return viewOf(row, ctx, (await getPolicy(ctx)).staleDays);
+	});
+
+/** The engines that the list has prices for, to suggest while typing. */
+export const pricedEngines = (ctx: Context): Promise<string[]> =>
+	inShop(ctx, async (tx) => {
+		const rows = await tx
+			.selectDistinctOn([price.engineKey], { engine: price.engine })
+			.from(price)
+			.where(and(eq(price.shopId, ctx.shopId), ne(price.engineKey, '')))
+			.orderBy(price.engineKey)
+			.limit(500);
+		return rows.map(({ engine }) => engine);
 	});

@@ -20,7 +20,10 @@ export const removePrice = (ctx: Context, id: number, version: number): Promise<
 		const [before] = await tx.select().from(price).where(mine).for('update');
 		if (!before) throw new NotFound('This price is not on the list any more');
 		if (before.version !== version)
-			throw new Refused('changed', 'Somebody changed this price meanwhile. Look at it and remove it again.');
+			throw new Refused(
+				'changed',
+				'Somebody changed this price meanwhile. Look at it and remove it again.'
+			);
 		await tx.delete(price).where(mine);
 		return record(tx, ctx, { about: 'price', aboutId: id, what: 'removed', detail: { before } });
 	});
@@ -41,7 +44,12 @@ const rowIn = (detail: Record<string, unknown>) => detail.before as Row;
 export const listRemoved = (ctx: Context): Promise<RemovedPrice[]> =>
 	inShop(ctx, async (tx) => {
 		const rows = await tx
-			.selectDistinctOn([event.aboutId], { id: event.id, at: event.at, by: member.name, detail: event.detail })
+			.selectDistinctOn([event.aboutId], {
+				id: event.id,
+				at: event.at,
+				by: member.name,
+				detail: event.detail
+			})
 			.from(event)
 			.innerJoin(member, and(eq(member.shopId, event.shopId), eq(member.id, event.memberId)))
 			.leftJoin(price, and(eq(price.shopId, event.shopId), eq(price.id, event.aboutId)))
@@ -51,7 +59,15 @@ export const listRemoved = (ctx: Context): Promise<RemovedPrice[]> =>
 		return rows
 			.map(({ id, at, by, detail }) => {
 				const { kind, engine, number, newCents } = rowIn(detail);
-				return { event: id, at, by, kindName: findKind(kind)?.name ?? kind, engine, number, newCents };
+				return {
+					event: id,
+					at,
+					by,
+					kindName: findKind(kind)?.name ?? kind,
+					engine,
+					number,
+					newCents
+				};
 			})
 			.sort((a, b) => b.event - a.event)
 			.slice(0, 20);
@@ -60,7 +76,10 @@ export const listRemoved = (ctx: Context): Promise<RemovedPrice[]> =>
 /** Puts a removed price back as it was; refused where another stands for the same thing by now. */
 export const putBackPrice = (ctx: Context, eventId: number): Promise<PriceView> =>
 	inShop(ctx, async (tx, ctx) => {
-		const [gone] = await tx.select().from(event).where(and(removals(ctx), eq(event.id, eventId)));
+		const [gone] = await tx
+			.select()
+			.from(event)
+			.where(and(removals(ctx), eq(event.id, eventId)));
 		if (!gone) throw new NotFound('This price cannot be put back any more');
 		const { version, ...before } = rowIn(gone.detail);
 		const [back] = await tx
@@ -75,7 +94,10 @@ export const putBackPrice = (ctx: Context, eventId: number): Promise<PriceView> 
 			.onConflictDoNothing()
 			.returning({ id: price.id });
 		if (!back)
-			throw new Refused('taken', 'There is a price for the same thing on the list by now. Change that one.');
+			throw new Refused(
+				'taken',
+				'There is a price for the same thing on the list by now. Change that one.'
+			);
 		await record(tx, ctx, { about: 'price', aboutId: back.id, what: 'put back' });
 		return getPrice(ctx, back.id);
 	});

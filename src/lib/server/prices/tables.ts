@@ -1,5 +1,14 @@
 import { sql } from 'drizzle-orm';
-import { check, date, index, integer, pgTable, primaryKey, text, uniqueIndex } from 'drizzle-orm/pg-core';
+import {
+	check,
+	date,
+	index,
+	integer,
+	pgTable,
+	primaryKey,
+	text,
+	uniqueIndex
+} from 'drizzle-orm/pg-core';
 import { idColumn, shopColumn, time } from '../db/columns';
 import { shop } from '../people/tables';
 

@@ -1,6 +1,5 @@
 import { PasswordChange } from '$lib/people/input';
 import { NotFound } from '$lib/refusal';
-import { db } from '$lib/server/db';
 import { setPassword, visitorAction } from '$lib/server/people';
 import { redirect } from '@sveltejs/kit';
 
@@ -13,7 +12,7 @@ export const load = ({ locals }) => {
 export const actions = {
 	default: visitorAction(PasswordChange, async ({ password }, { locals }) => {
 		if (!locals.person) throw new NotFound();
-		await setPassword(db(), locals.person.id, password, new Date());
+		await setPassword(locals.db, locals.person.id, password, new Date());
 		return { to: '/sign-in' };
 	})
 };

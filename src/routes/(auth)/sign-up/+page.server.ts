@@ -1,5 +1,4 @@
 import { currencies, SignUp, timeZones } from '$lib/people/input';
-import { db } from '$lib/server/db';
 import { openAnother, signUp, visitorAction } from '$lib/server/people';
 
 /** Open to everybody; who is signed in opens a further shop. */
@@ -12,14 +11,14 @@ export const load = ({ locals }) => ({
 const NewShop = SignUp.pick({ shopName: true, currency: true, timeZone: true, units: true });
 
 export const actions = {
-	new: visitorAction(SignUp, async (input) => {
-		const { slug } = await signUp(db(), input, new Date());
+	new: visitorAction(SignUp, async (input, { locals }) => {
+		const { slug } = await signUp(locals.db, input, new Date());
 		return { to: `/sign-in?to=/${slug}/donors` };
 	}),
 	another: visitorAction(NewShop, async (input, { locals }) => {
 		if (!locals.person) return { to: '/sign-in?to=/sign-up' };
 		const owner = { personId: locals.person.id, name: locals.person.name };
-		const { slug } = await openAnother(db(), input, owner, new Date());
+		const { slug } = await openAnother(locals.db, input, owner, new Date());
 		return { to: `/${slug}/donors` };
 	})
 };

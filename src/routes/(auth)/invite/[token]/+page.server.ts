@@ -1,12 +1,11 @@
 import { AcceptInput } from '$lib/people/input';
 import { Refused } from '$lib/refusal';
-import { db } from '$lib/server/db';
 import { acceptInvite, findInvite, visitorAction } from '$lib/server/people';
 
 /** Open to whoever holds the link. */
 export const load = async ({ params, locals }) => {
 	try {
-		const invite = await findInvite(db(), params.token, new Date());
+		const invite = await findInvite(locals.db, params.token, new Date());
 		return { invite, me: locals.person, stopped: null };
 	} catch (thrown) {
 		if (thrown instanceof Error)
@@ -25,7 +24,7 @@ export const actions = {
 			password: input.password
 		};
 		if (!params.token) throw new Refused('bad input', 'Open the link from the letter again.');
-		const { slug } = await acceptInvite(db(), params.token, as, new Date());
+		const { slug } = await acceptInvite(locals.db, params.token, as, new Date());
 		return { to: me ? `/${slug}/parts` : `/sign-in?to=/${slug}/parts` };
 	})
 };

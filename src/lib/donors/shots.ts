@@ -1,0 +1,23 @@
+import type { DonorShot } from './words';
+
+/** The six views that say later what came in. */
+export const WANTED_SHOTS = [
+	'front',
+	'back',
+	'label',
+	'pto',
+	'carburetor side',
+	'failure'
+] as const;
+
+export const SHOT_SAID: Record<DonorShot, string> = {
+	front: 'front',
+	back: 'back',
+	label: 'label or plate',
+	pto: 'PTO end',
+	'carburetor side': 'carburetor side',
+	failure: 'inside, or the failure',
+	box: 'the box',
+	other: 'something else'
+};
+

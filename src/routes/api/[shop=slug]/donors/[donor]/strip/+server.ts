@@ -1,0 +1,9 @@
+import { MoveInput } from '$lib/donors/input';
+import { getDonor, stripDonor } from '$lib/server/donors';
+import { change } from '$lib/server/people';
+import type { RequestEvent } from './$types';
+
+export const POST = change('work', MoveInput, async (ctx, input, { params }: RequestEvent) => {
+	await stripDonor(ctx, params.donor, input);
+	return { body: await getDonor(ctx, params.donor) };
+});
