@@ -1,18 +1,16 @@
-import { placeOf, type Queued } from '$lib/parts/place';
 import { verdictOf } from '$lib/parts/verdict';
-import type { Verdict, VerdictPrice, VerdictSubject } from '$lib/parts/verdict-view';
+import type { Verdict, VerdictSubject } from '$lib/parts/verdict-view';
 import type { Policy } from '$lib/people/policy';
 import { may } from '$lib/people/role';
 import type { Season } from '$lib/people/settings';
-import { isStale } from '$lib/prices/stale';
 import { NotFound } from '$lib/refusal';
-import { isCauseId } from '$lib/trade';
 import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import { donor } from '../donors/tables';
 import { getPolicy, getShop } from '../people';
-import { pricesFor, type PriceRow } from '../prices';
-import { proofsOf, queued, queueFor, rowsOf, type VerdictRow } from './verdict-rows';
+import { pricesFor } from '../prices';
+import { proofsOf, queued, queueFor, rowsOf } from './verdict-rows';
+import { priceOf, subjectOf } from './verdict-subject';
 
 interface Shop {
 	policy: Policy;
@@ -22,45 +20,6 @@ interface Shop {
 async function shopFigures(ctx: Context): Promise<Shop> {
 	const policy = await getPolicy(ctx);
 	return { policy, season: (await getShop(ctx)).season };
-}
-
-const causeOf = (id: string | null | undefined) => (id && isCauseId(id) ? id : null);
-
-const priceOf = (row: PriceRow | undefined, ctx: Context, policy: Policy): VerdictPrice | null =>
-	row
-		? {
-				newCents: row.newCents,
-				copyCents: row.copyCents,
-				source: row.source,
-				seenOn: row.seenOn,
-				stale: isStale(row.seenOn, ctx.now, policy.staleDays)
-			}
-		: null;
-
-type Cause = Pick<VerdictRow, 'cause' | 'secondCause' | 'sureness'>;
-
-function subjectOf(
-	asked: Queued & Cause,
-	others: readonly Queued[],
-	price: VerdictPrice | null,
-	policy: Policy
-): VerdictSubject {
-	return {
-		kind: asked.kind,
-		grade: asked.grade,
-		cause: causeOf(asked.cause),
-		secondCause: causeOf(asked.secondCause),
-		sureness: asked.sureness,
-		proofs: [],
-		...placeOf(asked, others),
-		price,
-		massGrams: null,
-		litres: null,
-		bin: null,
-		stillOn: true,
-		family: policy.families[asked.engineKey] ?? 'some',
-		waiting: false
-	};
 }
 
 /** Those who may not see the terms get the verdict without them. */

@@ -2,6 +2,7 @@
 // It keeps the list and answers which price counts for a part.
 // Not for: what a used part is worth (worth, and the verdicts of parts), what a sale brought in.
 export { editPrice, putPrice } from './put';
-export { getPrice, listPrices, pricedEngines, type PriceFilter } from './queries';
+export { getPrice, listPrices, pricedEngines } from './queries';
+export type { PriceFilter } from './filter';
 export { listRemoved, putBackPrice, removePrice } from './remove';
 export { pricesFor, type PriceAsk, type PriceRow } from './prices-for';
