@@ -85,7 +85,8 @@ const secure: Handle = async ({ event, resolve }) => {
 	const response = await resolve(event, {
 		transformPageChunk: ({ html }) =>
 			html.replace('<html lang="en">', `<html lang="en"${theme(event)}>`),
-		preload: ({ type }) => type === 'js' || type === 'css' || type === 'font'
+		preload: ({ type, path }) =>
+			type === 'js' || type === 'css' || path.includes('archivo-latin-wdth')
 	});
 	for (const [name, value] of headers(event)) response.headers.set(name, value);
 	return response;

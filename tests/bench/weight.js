@@ -6,7 +6,9 @@ import { gzipSync } from 'node:zlib';
 
 const base = process.env.E2E_BASE_URL ?? 'http://localhost:3000';
 const budget = 90 * 1024;
-const chrome = [process.env.CHROMIUM_PATH, '/usr/bin/chromium'].find((path) => path && existsSync(path));
+const chrome = [process.env.CHROMIUM_PATH, '/usr/bin/chromium'].find(
+	(path) => path && existsSync(path)
+);
 
 const browser = await chromium.launch({ executablePath: chrome, args: ['--no-sandbox'] });
 const page = await browser.newPage({ viewport: { width: 390, height: 844 } });
@@ -31,7 +33,9 @@ let over = 0;
 for (const [name, path] of Object.entries(screens)) {
 	const bytes = await weigh(path);
 	if (bytes > budget) over++;
-	console.log(`${(bytes / 1024).toFixed(1).padStart(6)} KB  ${((bytes / budget) * 100).toFixed(0).padStart(3)} %  ${name}  ${path}`);
+	console.log(
+		`${(bytes / 1024).toFixed(1).padStart(6)} KB  ${((bytes / budget) * 100).toFixed(0).padStart(3)} %  ${name}  ${path}`
+	);
 }
 await browser.close();
 console.log(`budget ${budget / 1024} KB of JavaScript gzipped a screen; ${over} over it`);
@@ -40,7 +44,9 @@ process.exit(over ? 1 : 0);
 /** @param {string} list @param {RegExp} like */
 async function firstHref(list, like) {
 	await page.goto(base + list);
-	const hrefs = await page.locator('a').evaluateAll((links) => links.map((link) => link.getAttribute('href') ?? ''));
+	const hrefs = await page
+		.locator('a')
+		.evaluateAll((links) => links.map((link) => link.getAttribute('href') ?? ''));
 	const found = hrefs.map((href) => href.split('?')[0] ?? '').find((href) => like.test(href));
 	if (!found) throw new Error(`Nothing listed on ${list}`);
 	return found;

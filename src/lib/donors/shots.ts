@@ -20,4 +20,3 @@ export const SHOT_SAID: Record<DonorShot, string> = {
 	box: 'the box',
 	other: 'something else'
 };
-

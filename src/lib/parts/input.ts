@@ -1,4 +1,6 @@
 import { z } from 'zod';
+import { ownPath } from '../people/own-path';
+import { typedAmount } from '../people/typed-money';
 import { isKindId } from '../trade';
 import { GRADES, PROOFS } from './words';
 
@@ -93,11 +95,10 @@ export const LogForm = z
 		figure: Proof.shape.figure,
 		unit: Proof.shape.unit,
 		passed: yesNo.optional(),
-		photo: z.instanceof(File).optional(),
 		scrap: z.enum(['scrap', 'destroy']).optional(),
 		reason: words(120).optional()
 	})
-	.transform(({ how, figure, unit, passed, scrap, reason, photo: _, ...rest }) => ({
+	.transform(({ how, figure, unit, passed, scrap, reason, ...rest }) => ({
 		...rest,
 		proof: how ? { how, figure, unit, passed: passed ?? true } : undefined,
 		scrapped: scrap
@@ -161,22 +162,23 @@ export const Sell = z.object({
 });
 export type Sell = z.infer<typeof Sell>;
 
-/** Money as people type it: 46 or 46.50, with a comma or a point. */
-export const SellForm = z
-	.object({
-		price: z
-			.string({ error: 'Enter what it was sold for' })
-			.trim()
-			.regex(/^\d{1,6}([.,]\d{1,2})?$/, 'Enter the price like 46 or 46.50'),
-		to: words(80).optional()
-	})
-	.transform(({ price, to }) => ({ cents: Math.round(Number(price.replace(',', '.')) * 100), to }));
+/** The price as people type it: 46, 46.50 or 46,50. */
+export const SellForm = z.object({
+	price: z.string({ error: 'Enter what it was sold for' }).transform((typed, issues) => {
+		const amount = typedAmount(typed);
+		if (amount !== null && amount <= 1_000_000) return amount;
+		issues.addIssue('Enter the price like 46 or 46.50');
+		return z.NEVER;
+	}),
+	to: words(80).optional()
+});
+export type SellForm = z.infer<typeof SellForm>;
 
 export const TakeBack = z.object({ reason: said('Say why it came back') });
 export type TakeBack = z.infer<typeof TakeBack>;
 
 export const Undo = z.object({
 	event: z.coerce.number().int().positive(),
-	back: z.string().regex(/^\/(?!\/)/, 'Go back and try again').optional()
+	back: z.string().default('/').transform(ownPath)
 });
 export type Undo = z.infer<typeof Undo>;

@@ -15,7 +15,7 @@ export { fitPart, sellPart } from './out';
 export { addPartPhoto, hangPhoto } from './photo';
 export { provePart } from './prove';
 export { pullPart } from './pull';
-export { getPart, listDonorParts } from './queries';
+export { countDonorParts, getPart, listDonorParts } from './queries';
 export { scrapPart } from './scrap';
 export { kindsStillOn } from './still-on';
 export { takeBackPart } from './take-back';

@@ -7,13 +7,15 @@ import { Refused } from '$lib/refusal';
 import type { Context } from '../context';
 import type { Tx } from '../db';
 import type { donor } from '../donors/tables';
+import type { KeptPhoto } from '../photos';
 import { mintTag } from '../tags';
 import { chanceOn } from './chance-on';
 import { keysOf } from './edit';
+import { hangKept } from './photo';
 import { placeNamed, redPlace, type Place } from './place';
 import { writeProof } from './prove';
 import { recordPart, wordsOf, type Done } from './row';
-import { part, partPhoto } from './tables';
+import { part } from './tables';
 
 export interface Logged extends Done {
 	id: number;
@@ -24,7 +26,8 @@ export interface Logged extends Done {
 export interface Origin {
 	donor: typeof donor.$inferSelect | null;
 	engine: string;
-	photoId?: number;
+	/** Pictures that are in the store already. */
+	kept?: readonly KeptPhoto[];
 }
 
 /** Never-reuse kinds and ruined ones become no stock; safety kinds only with every tick of their list. */
@@ -57,8 +60,7 @@ export async function logPart(tx: Tx, ctx: Context, input: Pull, origin: Origin)
 	const tag = await mintTag(tx, ctx, 'part');
 	const id = await insertPart(tx, ctx, { input, origin, place, state, tag });
 	if (input.proof) await writeProof(tx, ctx, id, input.proof);
-	if (origin.photoId !== undefined)
-		await tx.insert(partPhoto).values({ shopId: ctx.shopId, partId: id, photoId: origin.photoId });
+	for (const kept of origin.kept ?? []) await hangKept(tx, ctx, id, kept);
 	const detail = {
 		kind: input.kind,
 		grade: input.grade ?? 'core',

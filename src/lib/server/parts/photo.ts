@@ -1,4 +1,5 @@
 import { inShop, type Context } from '../context';
+import type { Tx } from '../db';
 import { addPhotoRow, keepPhoto, type KeptPhoto } from '../photos';
 import { changePart, partFor, type Done } from './row';
 import { partPhoto } from './tables';
@@ -11,10 +12,21 @@ export const hangPhoto = (
 ): Promise<Done & { id: number }> =>
 	inShop(ctx, async (tx, ctx) => {
 		const row = await partFor(tx, ctx, tag, 'photo');
-		const { id } = await addPhotoRow(ctx, kept);
-		await tx.insert(partPhoto).values({ shopId: ctx.shopId, partId: row.id, photoId: id });
+		const id = await hangKept(tx, ctx, row.id, kept);
 		return { ...(await changePart(tx, ctx, row, 'photo', {}, { photo: id })), id };
 	});
+
+/** The row of a kept picture and its tie to the part; the event is the caller's. */
+export async function hangKept(
+	tx: Tx,
+	ctx: Context,
+	partId: number,
+	kept: KeptPhoto
+): Promise<number> {
+	const { id } = await addPhotoRow({ ...ctx, tx }, kept);
+	await tx.insert(partPhoto).values({ shopId: ctx.shopId, partId, photoId: id });
+	return id;
+}
 
 /** Cleans a picture, puts it into the store, then onto the part. */
 export const addPartPhoto = async (ctx: Context, tag: string, bytes: Buffer) =>

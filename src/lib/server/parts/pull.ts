@@ -1,6 +1,7 @@
 import type { Pull } from '$lib/parts/input';
 import { inShop, type Context } from '../context';
 import { pullableDonor } from '../donors';
+import type { KeptPhoto } from '../photos';
 import { logPart, type Logged } from './log-part';
 
 /** Takes a part off a donor on the bench, or off a parked one whose release is in order, and logs it. */
@@ -8,9 +9,9 @@ export const pullPart = (
 	ctx: Context,
 	donorRef: string,
 	input: Pull,
-	photoId?: number
+	kept: readonly KeptPhoto[] = []
 ): Promise<Logged> =>
 	inShop(ctx, async (tx, ctx) => {
 		const donor = await pullableDonor(tx, ctx, donorRef);
-		return logPart(tx, ctx, input, { donor, engine: '', photoId });
+		return logPart(tx, ctx, input, { donor, engine: '', kept });
 	});

@@ -3,6 +3,7 @@ import { happened, mayUndo, UNDO_DAYS } from '$lib/parts/history';
 import { MISTAKE } from '$lib/parts/state';
 import type { Happening, PartItem, PartView, ProofView } from '$lib/parts/view';
 import type { Verdict } from '$lib/parts/verdict-view';
+import { may } from '$lib/people/role';
 import { photoLinks } from '$lib/photos/links';
 import { kind } from '$lib/trade';
 import { and, asc, desc, eq, isNull, ne, or } from 'drizzle-orm';
@@ -79,7 +80,7 @@ const donorOf = ({ donor }: PlacedPart): PartView['donorOf'] =>
 		sureness: donor.sureness
 	};
 
-function viewOf(placed: PlacedPart, worth: Verdict | null, slug: string) {
+function viewOf(ctx: Context, placed: PlacedPart, worth: Verdict | null, slug: string) {
 	const { photo: _, ...item } = itemOf(placed, worth, slug);
 	const row = placed.part;
 	return {
@@ -98,7 +99,7 @@ function viewOf(placed: PlacedPart, worth: Verdict | null, slug: string) {
 		heldUntil: row.heldUntil,
 		outAs: row.outAs,
 		outTo: row.outTo,
-		outCents: row.outCents,
+		outCents: may(ctx.role, 'see costs') ? row.outCents : null,
 		scrapReason: row.scrapReason,
 		destroyed: row.destroyed,
 		pulledAt: row.pulledAt,
@@ -116,7 +117,7 @@ export const getPart = (ctx: Context, tag: string): Promise<PartView> =>
 		const like = await nextLike(tx, ctx, row);
 		const gone = ['held', 'out', 'missing', 'scrapped'].includes(row.state);
 		return {
-			...viewOf(placed!, worth, slug),
+			...viewOf(ctx, placed!, worth, slug),
 			doubtful: await isDoubtful(tx, ctx, row.id),
 			proofs: await proofsOf(tx, ctx, row.id),
 			photos: await photosOf(tx, ctx, row.id, slug, kind(row.kind).name),
@@ -125,6 +126,17 @@ export const getPart = (ctx: Context, tag: string): Promise<PartView> =>
 			taken: gone ? await takenWords(tx, ctx, row) : null
 		};
 	});
+
+const notMistaken = or(isNull(part.scrapReason), ne(part.scrapReason, MISTAKE));
+
+/** How many parts were logged off a donor. */
+export const countDonorParts = (ctx: Context, donorId: number): Promise<number> =>
+	inShop(ctx, (tx) =>
+		tx.$count(
+			part,
+			and(eq(part.shopId, ctx.shopId), eq(part.donorId, donorId), notMistaken)
+		)
+	);
 
 /** The parts logged off a donor, oldest first; what was logged by mistake is left out. */
 export const listDonorParts = (ctx: Context, donorId: number): Promise<PartItem[]> =>
@@ -136,7 +148,7 @@ export const listDonorParts = (ctx: Context, donorId: number): Promise<PartItem[
 				and(
 					eq(part.shopId, ctx.shopId),
 					eq(part.donorId, donorId),
-					or(isNull(part.scrapReason), ne(part.scrapReason, MISTAKE))
+					notMistaken
 				)
 			)
 			.orderBy(asc(part.id));

@@ -1,7 +1,15 @@
 import { DonorEditForm } from '$lib/donors/form';
 import { CauseForm, ReleaseInput, SafeInput } from '$lib/donors/input';
 import { causeOptions, classOptions, fittingOptions } from '$lib/donors/options';
-import { addBox, editDonor, getDonor, listMakers, releaseDonor, tickSafe, todayIn } from '$lib/server/donors';
+import {
+	addBox,
+	editDonor,
+	getDonor,
+	listMakers,
+	releaseDonor,
+	tickSafe,
+	todayIn
+} from '$lib/server/donors';
 import { action, page } from '$lib/server/people';
 import { SAFE_TICKS } from '$lib/trade';
 import { z } from 'zod';
