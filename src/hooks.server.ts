@@ -3,7 +3,8 @@ import { NotFound } from '$lib/refusal';
 import type { Context } from '$lib/server/context';
 import { closeDb, db } from '$lib/server/db';
 import { env } from '$lib/server/env';
-import { headers } from '$lib/server/http/headers';
+import { BARE_POLICY, headers } from '$lib/server/http/headers';
+import { notHere } from '$lib/server/http/not-here';
 import { tasks } from '$lib/server/jobs';
 import { log } from '$lib/server/log';
 import { authHandle, keyHolder, shopsOf } from '$lib/server/people';
@@ -78,7 +79,7 @@ const guard: Handle = async ({ event, resolve }) => {
 	if (api) return json({ code: 'not found', message: new NotFound().message }, { status: 404 });
 	if (signedOut)
 		redirect(303, `/sign-in?to=${encodeURIComponent(event.url.pathname + event.url.search)}`);
-	return new Response(new NotFound().message, { status: 404 });
+	return notHere();
 };
 
 const secure: Handle = async ({ event, resolve }) => {
@@ -88,7 +89,9 @@ const secure: Handle = async ({ event, resolve }) => {
 		preload: ({ type, path }) =>
 			type === 'js' || type === 'css' || path.includes('archivo-latin-wdth')
 	});
-	for (const [name, value] of headers(event)) response.headers.set(name, value);
+	for (const [name, value] of headers()) response.headers.set(name, value);
+	if (!response.headers.has('Content-Security-Policy'))
+		response.headers.set('Content-Security-Policy', BARE_POLICY);
 	return response;
 };
 

@@ -6,7 +6,10 @@ const faults = (result: { error?: { issues: { message: string }[] } | undefined 
 
 describe('logging', () => {
 	it('needs a kind and a grade, nothing else', () => {
-		expect(Pull.parse({ kind: 'coil', grade: 'usable' })).toEqual({ kind: 'coil', grade: 'usable' });
+		expect(Pull.parse({ kind: 'coil', grade: 'usable' })).toEqual({
+			kind: 'coil',
+			grade: 'usable'
+		});
 		expect(faults(Pull.safeParse({ kind: 'coil' }))).toEqual(['Choose a grade']);
 		expect(faults(Pull.safeParse({ grade: 'usable' }))).toContain('Choose what kind of part it is');
 		expect(faults(Pull.safeParse({ kind: 'elbow', grade: 'usable' }))).toEqual([
@@ -69,7 +72,8 @@ it('an edit by form empties what was left empty', () => {
 		massGrams: null,
 		note: '',
 		set: '',
-		setMissing: ''
+		setMissing: '',
+		engine: ''
 	});
 });
 

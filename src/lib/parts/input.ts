@@ -6,11 +6,7 @@ import { GRADES, PROOFS } from './words';
 
 const words = (most: number) => z.string().trim().max(most, `Keep it under ${most} characters`);
 const said = (ask: string, most = 120) =>
-	z
-		.string({ error: ask })
-		.trim()
-		.min(1, ask)
-		.max(most, `Keep it under ${most} characters`);
+	z.string({ error: ask }).trim().min(1, ask).max(most, `Keep it under ${most} characters`);
 
 const kindId = z
 	.string({ error: 'Choose what kind of part it is' })
@@ -102,7 +98,10 @@ export const LogForm = z
 		...rest,
 		proof: how ? { how, figure, unit, passed: passed ?? true } : undefined,
 		scrapped: scrap
-			? { reason: reason ?? (scrap === 'destroy' ? 'destroyed, not safe' : 'not worth keeping'), destroyed: scrap === 'destroy' }
+			? {
+					reason: reason ?? (scrap === 'destroy' ? 'destroyed, not safe' : 'not worth keeping'),
+					destroyed: scrap === 'destroy'
+				}
 			: undefined
 	}))
 	.refine(gradeOrScrap, ASK_GRADE);
@@ -136,6 +135,7 @@ export const EditForm = Edit.transform((typed) => ({
 	note: '',
 	set: '',
 	setMissing: '',
+	engine: '',
 	...typed
 }));
 
@@ -143,7 +143,9 @@ export const Hold = z.object({
 	for: said('Say who or which job it is held for', 80),
 	/** Day or moment; without one it is a week. */
 	until: z
-		.union([z.iso.date(), z.iso.datetime({ offset: true })], { error: 'Enter the date it is held until' })
+		.union([z.iso.date(), z.iso.datetime({ offset: true })], {
+			error: 'Enter the date it is held until'
+		})
 		.optional()
 });
 export type Hold = z.infer<typeof Hold>;

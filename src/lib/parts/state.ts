@@ -97,7 +97,10 @@ export function whyNotShelf(part: PartFacts): No | null {
 	};
 }
 
-const can = (move: Move) => (part: PartFacts): true | string => whyNot(move, part)?.said ?? true;
+const can =
+	(move: Move) =>
+	(part: PartFacts): true | string =>
+		whyNot(move, part)?.said ?? true;
 
 export const canMove = can('move');
 export const canGrade = can('grade');

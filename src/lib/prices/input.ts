@@ -21,10 +21,13 @@ export const KindId = z
 	.string({ error: 'Choose the kind of part' })
 	.refine(isKindId, 'Choose the kind of part from the list');
 
-const fields = {
+const whatFor = {
 	kind: KindId,
 	engine: words('the engine', 120).optional(),
-	number: words('the part number', 60).optional(),
+	number: words('the part number', 60).optional()
+};
+
+const whence = {
 	source: words('the source: where you saw the price', 80),
 	seenOn: z.iso.date({ error: 'Enter the date seen, like 2026-03-14' })
 };
@@ -32,30 +35,39 @@ const fields = {
 const version = z.coerce.number().int().min(1).optional();
 
 const NEEDS_ONE = 'Enter the engine or the part number: a price belongs to one of them';
-const hasOne = (input: { engine?: string; number?: string }) =>
-	engineKey(input.engine ?? '') !== '' || numberKey(input.number ?? '') !== '';
+const hasOne = (input: { engine?: unknown; number?: unknown }) =>
+	engineKey(String(input.engine ?? '')) !== '' || numberKey(String(input.number ?? '')) !== '';
+
+/** Said together with what else is amiss, not after it. */
+const needsOne = {
+	error: NEEDS_ONE,
+	path: ['engine'],
+	when: ({ value }: { value: unknown }) => typeof value === 'object' && value !== null
+};
 
 /** A price as a script sends it: amounts in cents. */
 export const PriceInput = z
 	.object({
-		...fields,
+		...whatFor,
 		newCents: cents('the price of a new one'),
 		copyCents: cents('the price of a copy').nullish(),
+		...whence,
 		version
 	})
-	.refine(hasOne, { error: NEEDS_ONE, path: ['engine'] });
+	.refine(hasOne, needsOne);
 export type PriceInput = z.infer<typeof PriceInput>;
 
 /** A price as a form sends it: amounts as people type them. */
 export const PriceForm = z
 	.object({
-		...fields,
+		...whatFor,
 		new: typedMoney('the price of a new one'),
 		copy: typedMoney('the price of a copy').optional(),
+		...whence,
 		version,
 		back: z.string().optional()
 	})
-	.refine(hasOne, { error: NEEDS_ONE, path: ['engine'] });
+	.refine(hasOne, needsOne);
 export type PriceForm = z.infer<typeof PriceForm>;
 
 /** A filled-in form as the list takes it. */

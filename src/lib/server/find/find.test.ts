@@ -21,9 +21,9 @@ async function stock(shop: TestShop, maker: string) {
 		await addBin(ctx, { address, size: 'm', purpose: '', place: '', red: false });
 	const engine = { maker, model: 'HX-270V', class: 'WB' as const, fittings: ['recoil' as const] };
 	const release = { route: 'own' as const, document: '', on: '2026-03-01' };
-	const donor = await takeIn(ctx, { ...engine, cause: 'rod', sureness: 'seen', release });
+	const donor = await takeIn(ctx, { ...engine, cause: 'thrown-rod', sureness: 'seen', release });
 	await parkDonor(ctx, donor.number, {});
-	const fresh = await takeIn(ctx, { ...engine, model: 'QB 500', cause: 'wear', sureness: 'seen' });
+	const fresh = await takeIn(ctx, { ...engine, model: 'QB 500', cause: 'worn', sureness: 'seen' });
 	const coil = await pullPart(ctx, donor.number, {
 		kind: 'coil',
 		grade: 'good used',

@@ -1,8 +1,11 @@
-import type { RequestEvent } from '@sveltejs/kit';
 import { overTls } from '../env';
 
-/** The headers of every answer; the content security policy comes from the framework. */
-export function headers(event: RequestEvent): [string, string][] {
+/** For answers that are no page of the framework: data, pictures, plain words. */
+export const BARE_POLICY =
+	"default-src 'none'; style-src 'unsafe-inline'; base-uri 'none'; form-action 'self'; frame-ancestors 'none'";
+
+/** The headers of every answer; a page's content security policy comes from the framework. */
+export function headers(): [string, string][] {
 	const always: [string, string][] = [
 		['X-Content-Type-Options', 'nosniff'],
 		['X-Frame-Options', 'DENY'],
@@ -12,7 +15,5 @@ export function headers(event: RequestEvent): [string, string][] {
 		['Cross-Origin-Resource-Policy', 'same-origin']
 	];
 	if (overTls()) always.push(['Strict-Transport-Security', 'max-age=63072000; includeSubDomains']);
-	if (event.url.pathname.startsWith('/api/'))
-		always.push(['Content-Security-Policy', "default-src 'none'; frame-ancestors 'none'"]);
 	return always;
 }

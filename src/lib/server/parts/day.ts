@@ -18,6 +18,13 @@ function offsetMs(moment: Date, timeZone: string): number {
 		second: 'numeric'
 	}).formatToParts(moment);
 	const of = (type: string) => Number(parts.find((one) => one.type === type)?.value);
-	const shown = Date.UTC(of('year'), of('month') - 1, of('day'), of('hour'), of('minute'), of('second'));
+	const shown = Date.UTC(
+		of('year'),
+		of('month') - 1,
+		of('day'),
+		of('hour'),
+		of('minute'),
+		of('second')
+	);
 	return shown - Math.floor(moment.getTime() / 1000) * 1000;
 }

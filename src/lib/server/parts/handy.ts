@@ -1,3 +1,5 @@
+import type { KindTile } from '$lib/parts/logging';
+import { kind, kinds } from '$lib/trade';
 import { and, desc, eq, isNotNull, isNull, sql } from 'drizzle-orm';
 import { bin } from '../bins/tables';
 import { inShop, type Context } from '../context';
@@ -45,3 +47,21 @@ export const binsFor = (ctx: Context, kindId: string): Promise<HandyBin[]> =>
 			.orderBy(desc(sql`count(*)`), bin.address)
 			.limit(4)
 	);
+
+/** The kinds that the shop logs most, filled up with those that are called for most. */
+export const usualKinds = (ctx: Context): Promise<KindTile[]> =>
+	inShop(ctx, async (tx) => {
+		const rows = await tx
+			.select({ kind: part.kind })
+			.from(part)
+			.where(eq(part.shopId, ctx.shopId))
+			.groupBy(part.kind)
+			.orderBy(desc(sql`count(*)`), part.kind)
+			.limit(24);
+		const called = kinds
+			.filter((each) => each.reuse !== 'never')
+			.toSorted((a, b) => b.callsPerYear - a.callsPerYear)
+			.map((each) => each.id);
+		const ids = [...new Set([...rows.map((row) => row.kind), ...called])].slice(0, 24);
+		return ids.map((id) => ({ kind: id, kindName: kind(id).name, system: kind(id).system }));
+	});

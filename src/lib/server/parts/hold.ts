@@ -31,7 +31,12 @@ async function holdUntil(ctx: Context, typed: string | undefined): Promise<Date>
 export const freePart = (ctx: Context, tag: string): Promise<Done> =>
 	inShop(ctx, async (tx, ctx) => free(tx, ctx, await partFor(tx, ctx, tag, 'free'), {}));
 
-const free = (tx: Tx, ctx: Context, row: PartRow, detail: Record<string, unknown>): Promise<Done> => {
+const free = (
+	tx: Tx,
+	ctx: Context,
+	row: PartRow,
+	detail: Record<string, unknown>
+): Promise<Done> => {
 	const set = { state: restingState(row), heldFor: null, heldUntil: null } as const;
 	return changePart(tx, ctx, row, 'free', set, detail);
 };

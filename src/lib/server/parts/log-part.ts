@@ -34,7 +34,8 @@ export interface Origin {
 async function askRules(ctx: Context, input: Pull, from: Origin['donor']): Promise<void> {
 	if (input.scrapped) return;
 	const { never } = await chanceOn(ctx, input.kind, from);
-	if (never) throw new Refused('gate', `${never} It can be logged as scrapped or destroyed.`, 'kind');
+	if (never)
+		throw new Refused('gate', `${never} It can be logged as scrapped or destroyed.`, 'kind');
 	const left = unticked(input.kind, input.checklist ?? []);
 	if (left.length)
 		throw new Refused(
@@ -45,7 +46,11 @@ async function askRules(ctx: Context, input: Pull, from: Origin['donor']): Promi
 }
 
 /** Where it goes first: nowhere yet, a bin, or the red bin when its test was failed. */
-async function firstPlace(tx: Tx, ctx: Context, input: Pull): Promise<{ place: Place | null; state: PartState }> {
+async function firstPlace(
+	tx: Tx,
+	ctx: Context,
+	input: Pull
+): Promise<{ place: Place | null; state: PartState }> {
 	if (input.scrapped) return { place: null, state: 'scrapped' };
 	if (input.proof && !input.proof.passed) return { place: await redPlace(tx, ctx), state: 'back' };
 	if (!input.bin) return { place: null, state: 'pulled' };
@@ -108,6 +113,9 @@ async function insertPart(tx: Tx, ctx: Context, { input, origin, place, state, t
 		changedAt: ctx.now
 	};
 	const searchText = await wordsOf(tx, ctx, row);
-	const [made] = await tx.insert(part).values({ ...row, searchText }).returning({ id: part.id });
+	const [made] = await tx
+		.insert(part)
+		.values({ ...row, searchText })
+		.returning({ id: part.id });
 	return made!.id;
 }

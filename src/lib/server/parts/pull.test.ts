@@ -79,7 +79,11 @@ describe('pulling', () => {
 
 	it('refuses what the cause of death ruined', async () => {
 		const overspeed = await donorOnBench(ours.ctx, { cause: 'overspeed' });
-		const ticked = { kind: 'flywheel', grade: 'good used', checklist: checklist('flywheel') } as const;
+		const ticked = {
+			kind: 'flywheel',
+			grade: 'good used',
+			checklist: checklist('flywheel')
+		} as const;
 		await expect(pullPart(ours.ctx, overspeed, ticked)).rejects.toMatchObject({
 			code: 'gate',
 			message: expect.stringContaining('overspeed')
@@ -112,7 +116,8 @@ describe('pulling', () => {
 	});
 
 	it('names a bin that is not there, and knows no bin of another shop', async () => {
-		const into = (bin: string) => pullPart(ours.ctx, donor, { kind: 'fuel-tank', grade: 'usable', bin });
+		const into = (bin: string) =>
+			pullPart(ours.ctx, donor, { kind: 'fuel-tank', grade: 'usable', bin });
 		await expect(into('Z9-9')).rejects.toMatchObject({
 			field: 'bin',
 			message: expect.stringContaining('There is no bin Z9-9')
@@ -164,8 +169,8 @@ describe('another shop', () => {
 		const [mine] = await listDonorParts(ours.ctx, (await getPart(ours.ctx, tag)).donorOf!.id);
 		await expect(getPart(theirs.ctx, mine!.tag)).rejects.toThrow(NotFound);
 		expect(await partsByIds(theirs.ctx, [mine!.id])).toEqual([]);
-		await expect(
-			pullPart(theirs.ctx, 'D4', { kind: 'coil', grade: 'usable' })
-		).rejects.toThrow(NotFound);
+		await expect(pullPart(theirs.ctx, 'D4', { kind: 'coil', grade: 'usable' })).rejects.toThrow(
+			NotFound
+		);
 	});
 });

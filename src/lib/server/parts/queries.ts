@@ -1,74 +1,16 @@
 import { sayNumber } from '$lib/donors/reference';
-import { happened, mayUndo, UNDO_DAYS } from '$lib/parts/history';
-import { MISTAKE } from '$lib/parts/state';
-import type { Happening, PartItem, PartView, ProofView } from '$lib/parts/view';
+import type { PartView } from '$lib/parts/view';
 import type { Verdict } from '$lib/parts/verdict-view';
 import { may } from '$lib/people/role';
-import { photoLinks } from '$lib/photos/links';
 import { kind } from '$lib/trade';
-import { and, asc, desc, eq, isNull, ne, or } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
-import type { Tx } from '../db';
 import { getShop } from '../people';
-import { event, member } from '../people/tables';
-import { photo } from '../photos/tables';
+import { historyOf, photosOf, proofsOf } from './around';
 import { isDoubtful } from './doubt';
 import { itemOf, partsByIds, placedParts, type PlacedPart } from './items';
 import { partRow } from './row';
-import { part, partPhoto, proof } from './tables';
 import { nextLike, takenWords } from './taken';
 import { partVerdicts } from './verdicts';
-
-const proofsOf = (tx: Tx, ctx: Context, partId: number): Promise<ProofView[]> =>
-	tx
-		.select({
-			how: proof.how,
-			figure: proof.figure,
-			unit: proof.unit,
-			note: proof.note,
-			passed: proof.passed,
-			by: member.name,
-			at: proof.at
-		})
-		.from(proof)
-		.innerJoin(member, and(eq(member.shopId, proof.shopId), eq(member.id, proof.memberId)))
-		.where(and(eq(proof.shopId, ctx.shopId), eq(proof.partId, partId)))
-		.orderBy(asc(proof.at), asc(proof.id));
-
-async function historyOf(tx: Tx, ctx: Context, partId: number): Promise<Happening[]> {
-	const rows = await tx
-		.select({ event, by: member.name })
-		.from(event)
-		.innerJoin(member, and(eq(member.shopId, event.shopId), eq(member.id, event.memberId)))
-		.where(
-			and(eq(event.shopId, ctx.shopId), eq(event.about, 'part'), eq(event.aboutId, partId))
-		)
-		.orderBy(desc(event.id));
-	const since = ctx.now.getTime() - UNDO_DAYS * 24 * 3600 * 1000;
-	return rows.map(({ event: { id, at, ...one }, by }, place) => ({
-		id,
-		at,
-		by,
-		said: happened(one),
-		undo: place === 0 && mayUndo(one.what) && at.getTime() >= since
-	}));
-}
-
-async function photosOf(tx: Tx, ctx: Context, partId: number, slug: string, alt: string) {
-	const rows = await tx
-		.select({ id: photo.id })
-		.from(partPhoto)
-		.innerJoin(photo, and(eq(photo.shopId, partPhoto.shopId), eq(photo.id, partPhoto.photoId)))
-		.where(
-			and(
-				eq(partPhoto.shopId, ctx.shopId),
-				eq(partPhoto.partId, partId),
-				isNull(photo.deletedAt)
-			)
-		)
-		.orderBy(asc(photo.id));
-	return rows.map(({ id }) => ({ id, links: photoLinks(slug, id), alt }));
-}
 
 const donorOf = ({ donor }: PlacedPart): PartView['donorOf'] =>
 	donor && {
@@ -125,35 +67,4 @@ export const getPart = (ctx: Context, tag: string): Promise<PartView> =>
 			next: like ? ((await partsByIds(ctx, [like.id]))[0] ?? null) : null,
 			taken: gone ? await takenWords(tx, ctx, row) : null
 		};
-	});
-
-const notMistaken = or(isNull(part.scrapReason), ne(part.scrapReason, MISTAKE));
-
-/** How many parts were logged off a donor. */
-export const countDonorParts = (ctx: Context, donorId: number): Promise<number> =>
-	inShop(ctx, (tx) =>
-		tx.$count(
-			part,
-			and(eq(part.shopId, ctx.shopId), eq(part.donorId, donorId), notMistaken)
-		)
-	);
-
-/** The parts logged off a donor, oldest first; what was logged by mistake is left out. */
-export const listDonorParts = (ctx: Context, donorId: number): Promise<PartItem[]> =>
-	inShop(ctx, async (tx, ctx) => {
-		const rows = await tx
-			.select({ id: part.id })
-			.from(part)
-			.where(
-				and(
-					eq(part.shopId, ctx.shopId),
-					eq(part.donorId, donorId),
-					notMistaken
-				)
-			)
-			.orderBy(asc(part.id));
-		return partsByIds(
-			ctx,
-			rows.map(({ id }) => id)
-		);
 	});

@@ -55,7 +55,11 @@ export async function partFor(tx: Tx, ctx: Context, tag: string, move: Move): Pr
 const WORDED = ['label', 'numbers', 'note', 'engine', 'set', 'kind'] as const;
 
 /** The search words of a part as it would be with these changes. */
-export async function wordsOf(tx: Tx, ctx: Context, row: Pick<PartRow, (typeof WORDED)[number] | 'donorId'>) {
+export async function wordsOf(
+	tx: Tx,
+	ctx: Context,
+	row: Pick<PartRow, (typeof WORDED)[number] | 'donorId'>
+) {
 	if (row.donorId === null) return searchText(row, null);
 	const [from] = await tx
 		.select()
@@ -91,7 +95,9 @@ export async function changePart(
 		.where(and(own(ctx, row.id), eq(part.state, row.state), eq(part.version, row.version)))
 		.returning({ id: part.id });
 	if (!changed) throw new Refused('taken', await takenWords(tx, ctx, row));
-	const before = Object.fromEntries(Object.keys(set).map((key) => [key, row[key as keyof PartRow]]));
+	const before = Object.fromEntries(
+		Object.keys(set).map((key) => [key, row[key as keyof PartRow]])
+	);
 	const eventId = await recordPart(tx, ctx, row, what, next.state, { ...detail, before });
 	return { tag: row.tag, eventId };
 }

@@ -1,27 +1,10 @@
-import { MISTAKE } from '$lib/parts/state';
 import type { KindStillOn } from '$lib/parts/view';
 import { kindsOn, minutesToPull, type EngineClass, type Fitting, type Kind } from '$lib/trade';
-import { and, eq, isNull, ne, or } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
-import type { Tx } from '../db';
 import { donorRow } from '../donors';
 import { chanceOn } from './chance-on';
-import { part } from './tables';
+import { loggedKinds } from './off-donor';
 import { kindVerdicts } from './verdicts';
-
-async function loggedKinds(tx: Tx, ctx: Context, donorId: number): Promise<Set<string>> {
-	const rows = await tx
-		.selectDistinct({ kind: part.kind })
-		.from(part)
-		.where(
-			and(
-				eq(part.shopId, ctx.shopId),
-				eq(part.donorId, donorId),
-				or(isNull(part.scrapReason), ne(part.scrapReason, MISTAKE))
-			)
-		);
-	return new Set(rows.map((row) => row.kind));
-}
 
 /** A piece goes with its whole. */
 const isLogged = (each: Kind, logged: Set<string>) =>

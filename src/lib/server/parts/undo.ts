@@ -19,7 +19,10 @@ export const undoPart = (ctx: Context, eventId: number): Promise<Done> =>
 		if (!row) throw new NotFound();
 		const newest = await partEvent(tx, ctx, eq(event.aboutId, row.id));
 		if (newest.id !== eventId)
-			throw new Refused('changed', 'Something else was done with this part since. Look at its history.');
+			throw new Refused(
+				'changed',
+				'Something else was done with this part since. Look at its history.'
+			);
 		if (!mayUndo(newest.what))
 			throw new Refused('gate', `${happened(newest)}: this stays in the history.`);
 		if (ctx.now.getTime() - newest.at.getTime() > UNDO_DAYS * 24 * 3600 * 1000)
@@ -42,8 +45,7 @@ async function partEvent(tx: Tx, ctx: Context, which: ReturnType<typeof eq>): Pr
 /** What stood there before; of a part that was only just logged, that it was a mistake. */
 function before(newest: Event): Partial<PartRow> {
 	const state = undone(newest.fromState as PartState | null);
-	if (newest.fromState === null)
-		return { state, scrapReason: MISTAKE, binId: null, boxId: null };
+	if (newest.fromState === null) return { state, scrapReason: MISTAKE, binId: null, boxId: null };
 	const kept = newest.detail.before as Partial<PartRow>;
 	return { ...kept, ...('heldUntil' in kept ? { heldUntil: moment(kept.heldUntil) } : {}), state };
 }

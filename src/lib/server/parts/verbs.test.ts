@@ -125,8 +125,9 @@ describe('holding', () => {
 		const answers = await Promise.allSettled(asked);
 		const lost = answers.flatMap((one) => (one.status === 'rejected' ? [one.reason] : []));
 		expect(lost).toHaveLength(19);
-		expect(lost.every((one) => one.code === 'taken' && one.message.startsWith('Held for caller')))
-			.toBe(true);
+		expect(
+			lost.every((one) => one.code === 'taken' && one.message.startsWith('Held for caller'))
+		).toBe(true);
 	});
 });
 
@@ -152,7 +153,11 @@ describe('using and selling', () => {
 	});
 
 	it('a kind for this shop only is fitted, never sold', async () => {
-		const own = { kind: 'govspring', grade: 'good used', checklist: checklist('govspring') } as const;
+		const own = {
+			kind: 'govspring',
+			grade: 'good used',
+			checklist: checklist('govspring')
+		} as const;
 		const { tag } = await pullPart(ours.ctx, donor, own);
 		await expect(sellPart(ours.ctx, tag, { cents: 500, to: 'x' })).rejects.toMatchObject({
 			code: 'gate',
@@ -162,7 +167,11 @@ describe('using and selling', () => {
 	});
 
 	it('a kind for the trade is sold only with the name of who takes it', async () => {
-		const wheel = { kind: 'flywheel', grade: 'good used', checklist: checklist('flywheel') } as const;
+		const wheel = {
+			kind: 'flywheel',
+			grade: 'good used',
+			checklist: checklist('flywheel')
+		} as const;
 		const { tag } = await pullPart(ours.ctx, donor, wheel);
 		await expect(sellPart(ours.ctx, tag, { cents: 5000 })).rejects.toMatchObject({ field: 'to' });
 		await sellPart(ours.ctx, tag, { cents: 5000, to: 'Thrennick Mower Care' });
@@ -183,7 +192,12 @@ describe('using and selling', () => {
 describe('proving', () => {
 	it('a failed test ends a hold and puts it into the red bin', async () => {
 		await holdPart(ours.ctx, tag, { for: 'job 1' });
-		await provePart(ours.ctx, tag, { how: 'bench test cold', figure: 3, unit: 'kV', passed: false });
+		await provePart(ours.ctx, tag, {
+			how: 'bench test cold',
+			figure: 3,
+			unit: 'kV',
+			passed: false
+		});
 		expect(await now()).toMatchObject({ state: 'back', bin: 'R1', heldBy: null, doubtful: true });
 		expect((await now()).history[0]!.said).toBe('Bench test cold: failed, 3 kV');
 	});
@@ -197,9 +211,9 @@ describe('grading and editing', () => {
 			code: 'changed',
 			message: expect.stringMatching(/graded usable.*You typed clean used/)
 		});
-		await expect(
-			editPart(ours.ctx, tag, { version, label: 'long lead' })
-		).rejects.toMatchObject({ message: expect.stringMatching(/label: nothing.*label: long lead/) });
+		await expect(editPart(ours.ctx, tag, { version, label: 'long lead' })).rejects.toMatchObject({
+			message: expect.stringMatching(/label: nothing.*label: long lead/)
+		});
 	});
 
 	it('changes only what was sent, and what it is found by', async () => {
@@ -225,7 +239,9 @@ describe('scrapping and going missing', () => {
 
 	it('does not scrap what is out', async () => {
 		await fitPart(ours.ctx, tag, { job: 'job 1' });
-		await expect(scrapPart(ours.ctx, tag, { reason: 'x' })).rejects.toMatchObject({ code: 'taken' });
+		await expect(scrapPart(ours.ctx, tag, { reason: 'x' })).rejects.toMatchObject({
+			code: 'taken'
+		});
 	});
 
 	it('turns up again where it belongs, a doubtful one in the red bin', async () => {

@@ -15,6 +15,9 @@ import { sweepPhotos } from './sweep';
 import { photo } from './tables';
 import { turns } from './turns';
 
+// A bucket of its own: shops of other databases have the same numbers, and the sweep would find theirs.
+process.env.S3_BUCKET = `photos-${process.pid}-${Date.now()}`;
+
 let ours: TestShop;
 let theirs: TestShop;
 beforeAll(async () => {

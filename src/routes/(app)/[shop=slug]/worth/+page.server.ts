@@ -52,6 +52,6 @@ export const actions = {
 		const figures = kindFiguresOf(form, currency);
 		const kinds = Object.keys(figures).length > 0 ? { ...others, [form.kind]: figures } : others;
 		await editPolicy(ctx, { own: ownOf({ ...policy, kinds }), version: form.version });
-		return done('Figures of the kind saved');
+		return { to: `?kind=${form.kind}&done=Figures of the kind saved#kinds` };
 	})
 };

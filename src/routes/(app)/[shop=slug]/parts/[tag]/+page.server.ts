@@ -1,0 +1,64 @@
+import { Nothing } from '$lib/parts/input';
+import { whyNot, type Move } from '$lib/parts/state';
+import type { PartView } from '$lib/parts/view';
+import { foundPart, freePart, getPart, hangPhoto, missPart } from '$lib/server/parts';
+import { action, page } from '$lib/server/people';
+import { actionWithPhotos } from '$lib/server/photos';
+import { causeSaid, isCauseId, whyChance } from '$lib/trade';
+import { plural } from '$lib/format';
+import { after } from './sheet';
+import type { PageServerLoadEvent, RequestEvent } from './$types';
+
+const ASKED: Move[] = [
+	'move',
+	'hold',
+	'free',
+	'fit',
+	'take back',
+	'scrap',
+	'prove',
+	'miss',
+	'find'
+];
+
+export const load = page('see', async (ctx, { params }: PageServerLoadEvent) => {
+	const part = await getPart(ctx, params.tag);
+	return {
+		part,
+		open: ASKED.filter((move) => whyNot(move, part) === null),
+		causes: causesOf(part),
+		back: { href: `/${params.shop}/parts`, label: 'Find' },
+		short: part.tag
+	};
+});
+
+/** What its donor died of, and what that means for this kind where people often get it wrong. */
+const causesOf = ({ kind, donorOf }: PartView) =>
+	[donorOf?.cause, donorOf?.secondCause].flatMap((id) =>
+		id && isCauseId(id) ? [{ said: causeSaid(id), why: whyChance(kind, id) }] : []
+	);
+
+export const actions = {
+	free: action('hold', Nothing, async (ctx, _input, event: RequestEvent) =>
+		after(event, await freePart(ctx, event.params.tag), 'Let go again')
+	),
+	miss: action('work', Nothing, async (ctx, _input, event: RequestEvent) =>
+		after(event, await missPart(ctx, event.params.tag), 'Noted as missing')
+	),
+	find: action('work', Nothing, async (ctx, _input, event: RequestEvent) =>
+		after(event, await foundPart(ctx, event.params.tag), 'Back where it belongs')
+	),
+	photos: actionWithPhotos(
+		'work',
+		Nothing,
+		'file',
+		async (ctx, _input, kept, event: RequestEvent) => {
+			for (const photo of kept) await hangPhoto(ctx, event.params.tag, photo);
+			return after(
+				event,
+				{ tag: event.params.tag },
+				plural(kept.length, 'photo added', 'photos added')
+			);
+		}
+	)
+};

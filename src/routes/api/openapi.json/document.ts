@@ -1,0 +1,105 @@
+import { whoMay } from '$lib/people/role';
+import {
+	OpenAPIRegistry,
+	OpenApiGeneratorV31,
+	type RouteConfig
+} from '@asteasolutions/zod-to-openapi';
+import { Fault } from './answers';
+import { donors } from './donors';
+import { parts } from './parts';
+import { z, type Row } from './row';
+import { shelf } from './shelf';
+import { worth } from './worth';
+
+export const rows: readonly Row[] = [...donors, ...parts, ...shelf, ...worth];
+
+const PARAMS: Record<string, string> = {
+	shop: 'Slug of the shop',
+	donor: 'Number of the donor, D12, or the tag of one of its boxes',
+	part: 'Tag of the part',
+	tag: 'Any tag, as typed',
+	id: 'Id of the photo',
+	size: 'thumb, card or full',
+	call: 'usedPrice, gain or keepCleaning'
+};
+
+const idempotency = z.object({
+	'Idempotency-Key': z
+		.string()
+		.max(200)
+		.describe('A key of yours for this change: sent again it is answered, not done, again')
+});
+
+const REFUSALS: Record<number, string> = {
+	400: 'Something in what was sent is to be put right',
+	401: 'Not signed in, and no key of this shop',
+	403: 'Not for this role',
+	404: 'Not there, or not of this shop',
+	409: 'Taken, changed meanwhile, or a gate is shut: says by whom, since when, what opens it',
+	422: 'This key was sent before with another body'
+};
+
+const isChange = (row: Row) => row.method !== 'get' && !row.changesNothing;
+
+function params(path: string): z.ZodObject {
+	const names = [...path.matchAll(/\{(\w+)\}/g)].map((found) => found[1]!);
+	return z.object(
+		Object.fromEntries(names.map((name) => [name, z.string().describe(PARAMS[name] ?? name)]))
+	);
+}
+
+function sent({ body, form }: Row) {
+	if (body) return { required: true, content: { 'application/json': { schema: body } } };
+	if (!form) return undefined;
+	const file = z.string().openapi({ format: 'binary', description: 'JPEG, PNG, WebP or AVIF' });
+	return { required: true, content: { 'multipart/form-data': { schema: form.extend({ file }) } } };
+}
+
+function answers(row: Row): RouteConfig['responses'] {
+	const content: Record<string, { schema: z.ZodType }> =
+		row.gives === 'picture'
+			? { 'image/webp': { schema: z.string().openapi({ format: 'binary' }) } }
+			: { 'application/json': { schema: row.gives } };
+	const refused = [400, 401, 403, 404, ...(row.shut ? [409] : []), ...(isChange(row) ? [422] : [])];
+	const faults = refused.map((status) => [
+		status,
+		{ description: REFUSALS[status]!, content: { 'application/json': { schema: Fault } } }
+	]);
+	return { [row.status ?? 200]: { description: 'Done', content }, ...Object.fromEntries(faults) };
+}
+
+function described(row: Row): RouteConfig {
+	const path = `/api/{shop}${row.path}`;
+	const body = sent(row);
+	return {
+		method: row.method,
+		path,
+		summary: row.said,
+		description: `For ${whoMay(row.may)}.`,
+		security: [{ key: [] }, { session: [] }],
+		request: {
+			params: params(path),
+			...(row.query ? { query: row.query } : {}),
+			...(isChange(row) ? { headers: idempotency } : {}),
+			...(body ? { body } : {})
+		},
+		responses: answers(row)
+	};
+}
+
+/** The outside edge as OpenAPI 3.1, from the inputs that the server itself reads by. */
+export function openApi() {
+	const registry = new OpenAPIRegistry();
+	registry.registerComponent('securitySchemes', 'key', { type: 'http', scheme: 'bearer' });
+	const session = { type: 'apiKey', in: 'cookie', name: 'endplay.session' } as const;
+	registry.registerComponent('securitySchemes', 'session', session);
+	for (const row of rows) registry.registerPath(described(row));
+	return new OpenApiGeneratorV31(registry.definitions).generateDocument({
+		openapi: '3.1.0',
+		info: {
+			title: 'Endplay',
+			version: '1',
+			description: 'The shelf of a repair shop. Amounts are whole cents, dates ISO 8601.'
+		}
+	});
+}

@@ -1,0 +1,107 @@
+import { FindQuery } from '$lib/find/input';
+import {
+	Edit,
+	Fit,
+	Hold,
+	Move,
+	Nothing,
+	OldStock,
+	Proof,
+	Scrap,
+	Sell,
+	TakeBack
+} from '$lib/parts/input';
+import type { Ability } from '$lib/people/role';
+import { Part, PartItem, Photo, VerdictWithSources } from './answers';
+import { z, type Row } from './row';
+
+const one = '/parts/{part}';
+const verb = (name: string, may: Ability, body: z.ZodType, said: string): Row => ({
+	method: 'post',
+	path: `${one}/${name}`,
+	said,
+	may,
+	body,
+	gives: Part,
+	shut: true
+});
+
+const facet = z.array(
+	z.object({ value: z.string(), count: z.int(), said: z.string().optional() })
+);
+const Found = z.object({
+	items: z.array(PartItem),
+	total: z.int(),
+	facets: z.object({ kind: facet, grade: facet, state: facet, bin: facet }),
+	donors: z
+		.array(
+			z.object({
+				number: z.string(),
+				engine: z.string(),
+				minutes: z.number(),
+				kind: z.string(),
+				kindName: z.string(),
+				state: z.string()
+			})
+		)
+		.describe('Donors that still carry one, with the minutes to pull it'),
+	nearest: z.array(z.object({ kind: z.string(), kindName: z.string(), count: z.int() })),
+	next: z.string().nullable()
+});
+
+export const parts: Row[] = [
+	{
+		method: 'get',
+		path: '/parts',
+		said: 'Finds parts by tag, number, kind, engine, bin, donor or words',
+		may: 'see',
+		query: FindQuery,
+		gives: Found
+	},
+	{
+		method: 'post',
+		path: '/parts',
+		said: 'Logs old stock: a part without a donor',
+		may: 'work',
+		body: OldStock,
+		status: 201,
+		gives: Part,
+		shut: true
+	},
+	{ method: 'get', path: one, said: 'One part', may: 'see', gives: Part },
+	{
+		method: 'patch',
+		path: one,
+		said: 'Changes what its tag says',
+		may: 'work',
+		body: Edit,
+		gives: Part,
+		shut: true
+	},
+	{
+		method: 'get',
+		path: `${one}/verdict`,
+		said: 'Whether keeping it pays, and why',
+		may: 'see',
+		gives: VerdictWithSources
+	},
+	verb('move', 'work', Move, 'Moves it to a bin or a box'),
+	verb('hold', 'hold', Hold, 'Keeps it for somebody until a date'),
+	verb('free', 'hold', Nothing, 'Lets a held part go again'),
+	verb('fit', 'hold', Fit, 'Uses it on a job'),
+	verb('sell', 'trade', Sell, 'Sells it over the counter'),
+	verb('take-back', 'trade', TakeBack, 'Takes a part back into the red bin'),
+	verb('scrap', 'work', Scrap, 'Scraps or destroys it'),
+	verb('proof', 'work', Proof, 'Records how it was checked'),
+	verb('miss', 'work', Nothing, 'Says that it is not where it should be'),
+	verb('found', 'work', Nothing, 'Says that a missing part is there again'),
+	{
+		method: 'post',
+		path: `${one}/photos`,
+		said: 'Adds a photo to a part',
+		may: 'work',
+		form: z.object({}),
+		status: 201,
+		gives: Photo
+	}
+];
