@@ -21,7 +21,7 @@ const SAID: Record<string, (detail: Record<string, unknown>, toState: string | n
 	prove: (d) =>
 		`${word(d.how)}: ${d.passed === true ? 'passed' : 'failed'}${after(', ', d.figure)}`,
 	hold: (d) => `Held for ${word(d.for)}`,
-	free: (d) => (d.expired === true ? 'The hold ran out' : 'Let go again'),
+	free: (d) => (d.expired === true ? 'The hold ran out' : 'Freed'),
 	fit: (d) => `Fitted on ${word(d.job)}`,
 	sell: (d) => `Sold${after(' to ', d.to)}`,
 	'take back': (d) => `Came back${after(': ', d.reason)}`,

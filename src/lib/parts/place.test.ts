@@ -26,7 +26,10 @@ describe('the place in the queue', () => {
 		expect(placeOf(part(1, { pulledAt: 2000 }), [part(2)]).place).toBe(2);
 		expect(placeOf(part(1), [part(2, { pulledAt: 2000 })]).place).toBe(1);
 		expect(placeOf(part(1), [part(2, { grade: 'clean used', pulledAt: 9000 })]).place).toBe(2);
-		expect(placeOf(part(1), [part(2, { grade: 'usable', pulledAt: 1 })])).toEqual({ place: 1, have: 2 });
+		expect(placeOf(part(1), [part(2, { grade: 'usable', pulledAt: 1 })])).toEqual({
+			place: 1,
+			have: 2
+		});
 	});
 	it.each([
 		['held', part(2, { state: 'held' })],

@@ -112,16 +112,26 @@ describe('the demo shop comes out as a mechanic would expect', () => {
 describe('a verdict', () => {
 	it('is never for a kind that is not used again and for a ruined one, whatever it would bring', () => {
 		const dear = { ...PRICE, newCents: 900_000 };
-		expect(verdict({ kind: 'fuel-hose', price: dear })).toMatchObject({ verdict: 'never', gainCents: null });
+		expect(verdict({ kind: 'fuel-hose', price: dear })).toMatchObject({
+			verdict: 'never',
+			gainCents: null
+		});
 		const flywheel = verdict({ kind: 'flywheel', cause: 'overspeed', price: dear });
 		expect(flywheel.verdict).toBe('never');
 		expect(flywheel.reason).toContain('overspeed');
-		expect(verdict({ kind: 'flywheel', cause: 'retired', secondCause: 'overspeed' }).reason).toContain('overspeed');
+		expect(
+			verdict({ kind: 'flywheel', cause: 'retired', secondCause: 'overspeed' }).reason
+		).toContain('overspeed');
 	});
 
 	it('needs a price without one, and says from which new price it pays', () => {
 		const without = verdict({ price: null });
-		expect(without).toMatchObject({ verdict: 'needs a price', gainCents: null, askedCents: null, timing: null });
+		expect(without).toMatchObject({
+			verdict: 'needs a price',
+			gainCents: null,
+			askedCents: null,
+			timing: null
+		});
 		const even = without.breakEvenNewCents!;
 		const at = (newCents: number) => verdict({ price: { ...PRICE, newCents } }).gainCents!;
 		// the asked price is rounded to a whole dollar: look a step to either side
@@ -133,15 +143,23 @@ describe('a verdict', () => {
 		expect(verdict({ kind: 'genhead', cause: 'retired', price: null }).rough).toBe('keep');
 		expect(verdict({ kind: 'exgasket', price: null }).rough).toBeNull();
 		expect(verdict({ kind: 'carb-float', price: null }).rough).toBeNull();
-		expect(verdict({ kind: 'fuel-valve', cause: 'stale-fuel', price: null }).rough).toBe('let it go');
+		expect(verdict({ kind: 'fuel-valve', cause: 'stale-fuel', price: null }).rough).toBe(
+			'let it go'
+		);
 	});
 
 	it('prices a part that waits for its test at the grade it will have if it passes', () => {
 		const high = verdict({ cause: 'thrown-rod' });
 		expect(high).toMatchObject({ askedGrade: 'clean used', askedCents: 6000, untestedCents: 2500 });
-		expect(verdict({ cause: 'overheated' })).toMatchObject({ askedGrade: 'good used', askedCents: 4500 });
+		expect(verdict({ cause: 'overheated' })).toMatchObject({
+			askedGrade: 'good used',
+			askedCents: 4500
+		});
 		expect(verdict({ cause: 'flood' })).toMatchObject({ askedGrade: 'usable', askedCents: 3000 });
-		expect(verdict({ grade: 'good used' })).toMatchObject({ askedCents: 4500, untestedCents: null });
+		expect(verdict({ grade: 'good used' })).toMatchObject({
+			askedCents: 4500,
+			untestedCents: null
+		});
 	});
 
 	it('after a passed bench test has nothing left to do and no timing', () => {
@@ -151,12 +169,21 @@ describe('a verdict', () => {
 		expect(tested.figures?.input.minutesLater).toBe(0);
 		expect(tested.gainCents).toBeGreaterThan(verdict({ grade: 'good used' }).gainCents!);
 		const failedSince = [...proofs, { how: 'bench test cold', passed: false }] as const;
-		expect(verdict({ grade: 'good used', proofs: failedSince }).figures?.input.chanceGood).toBe(0.02);
+		expect(verdict({ grade: 'good used', proofs: failedSince }).figures?.input.chanceGood).toBe(
+			0.02
+		);
 	});
 
 	it('does the work when called where cleaning does not keep, even at no wage', () => {
-		const free: Policy = { ...DEFAULT_POLICY, labourHourCents: { normal: 3400, slow: 0, rush: 7800 } };
-		const carb = verdict({ kind: 'carb-float', price: { ...PRICE, newCents: 30000 } }, free, 'slow');
+		const free: Policy = {
+			...DEFAULT_POLICY,
+			labourHourCents: { normal: 3400, slow: 0, rush: 7800 }
+		};
+		const carb = verdict(
+			{ kind: 'carb-float', price: { ...PRICE, newCents: 30000 } },
+			free,
+			'slow'
+		);
 		expect(carb.timing).toBe('when-called');
 		const { whenCalled, now, scrap } = carb.figures!.terms;
 		expect(now).toBeGreaterThan(whenCalled);
@@ -172,26 +199,40 @@ describe('a verdict', () => {
 	});
 
 	it('counts family, ageing, own figures, weight, bin and a waiting customer', () => {
-		const input = (over: Partial<VerdictSubject>, policy?: Policy) => verdict(over, policy).figures!.input;
+		const input = (over: Partial<VerdictSubject>, policy?: Policy) =>
+			verdict(over, policy).figures!.input;
 		expect(input({ family: 'lots' }).callsPerYear).toBeCloseTo(3 * 0.98);
 		expect(input({ family: 'hardly' }).callsPerYear).toBeCloseTo(0.3 * 0.98);
 		expect(input({}).dyingRate).toBeCloseTo(-Math.log(0.85));
 		expect(input({ kind: 'fuel-pump', cause: 'retired' }).dyingRate).toBeCloseTo(
 			-Math.log(kind('fuel-pump').ages ? 0.7 : 0.85)
 		);
-		expect(input({}, { ...DEFAULT_POLICY, kinds: { coil: { callsPerYear: 5 } } }).callsPerYear).toBe(5);
+		expect(
+			input({}, { ...DEFAULT_POLICY, kinds: { coil: { callsPerYear: 5 } } }).callsPerYear
+		).toBe(5);
 		expect(input({}).scrapCents).toBeCloseTo(0.35 * 57.5);
 		expect(input({ massGrams: 1000 }).scrapCents).toBeCloseTo(57.5);
-		expect(input({ massGrams: 1000 }, { ...DEFAULT_POLICY, scrapKgCents: { 'Cu-M': 80 } }).scrapCents).toBeCloseTo(80);
+		expect(
+			input({ massGrams: 1000 }, { ...DEFAULT_POLICY, scrapKgCents: { 'Cu-M': 80 } }).scrapCents
+		).toBeCloseTo(80);
 		expect(input({}).shelfCents).toBe(80);
-		expect(input({ litres: 2, bin: { litres: 20, yearlyCostCents: 900 } }).shelfCents).toBeCloseTo(90);
+		expect(input({ litres: 2, bin: { litres: 20, yearlyCostCents: 900 } }).shelfCents).toBeCloseTo(
+			90
+		);
 		expect(input({ waiting: true }).waiting).toBe(0.7);
 		expect(input({}).comeBackCents).toBeCloseTo((30 * 3400) / 60);
 	});
 
 	it('says when the copy leaves no new price that pays', () => {
-		const capped = verdict({ kind: 'carb-float', price: { ...PRICE, newCents: 5800, copyCents: 1900 } });
-		expect(capped).toMatchObject({ verdict: 'let it go', breakEvenNewCents: null, copyBinds: true });
+		const capped = verdict({
+			kind: 'carb-float',
+			price: { ...PRICE, newCents: 5800, copyCents: 1900 }
+		});
+		expect(capped).toMatchObject({
+			verdict: 'let it go',
+			breakEvenNewCents: null,
+			copyBinds: true
+		});
 		expect(evenSaid(capped, (cents) => `$${cents / 100}`)).toBe(
 			'No new price makes it pay while the copy costs $19.'
 		);
@@ -201,18 +242,28 @@ describe('a verdict', () => {
 		const own = { ...DEFAULT_POLICY, shares: { ...DEFAULT_POLICY.shares, 'clean used': 0.5 } };
 		const { terms, gainCents } = verdict({ cause: 'thrown-rod' }, own);
 		const of = (said: string) => terms.find((term) => term.said.startsWith(said));
-		expect(of('A new one costs')).toMatchObject({ value: 10000, source: 'Counter book, seen 3 March 2026' });
+		expect(of('A new one costs')).toMatchObject({
+			value: 10000,
+			source: 'Counter book, seen 3 March 2026'
+		});
 		expect(of('Share of new')).toMatchObject({ value: 0.5, source: "the shop's own" });
 		expect(of('Good when fitted')?.source).toBe('thrown rod, hole in block: high (policy default)');
 		expect(of('Calls for it')?.source).toBe("the kind's usual");
 		expect(of('Gain over')?.value).toBe(gainCents);
-		const noOil = verdict({ kind: 'starter12', cause: 'no-oil' }).terms.find(({ said }) => said === 'Good when fitted');
+		const noOil = verdict({ kind: 'starter12', cause: 'no-oil' }).terms.find(
+			({ said }) => said === 'Good when fitted'
+		);
 		expect(termSaid(noOil!, 'USD')).toBe('60%');
 		expect(noOil!.source).toContain('ran without oil, seized: medium');
 	});
 
 	it('computes even where nothing wears and nobody calls', () => {
-		const still = { ...DEFAULT_POLICY, moneyRate: 0, dyingRate: 0, kinds: { coil: { callsPerYear: 0 } } };
+		const still = {
+			...DEFAULT_POLICY,
+			moneyRate: 0,
+			dyingRate: 0,
+			kinds: { coil: { callsPerYear: 0 } }
+		};
 		expect(verdict({}, still)).toMatchObject({ verdict: 'let it go', waitYears: null });
 	});
 });

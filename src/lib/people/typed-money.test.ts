@@ -20,9 +20,14 @@ describe('money as people type it', () => {
 		expect(typedAmount(typed)).toBe(amount);
 	});
 	it('becomes the smallest unit of the currency and back', () => {
-		expect([inCents(46.5, 'USD'), inCents(46, 'JPY'), inCents(1.005, 'KWD')]).toEqual([4650, 46, 1005]);
-		expect([centsTyped(4650, 'USD'), centsTyped(4600, 'USD'), centsTyped(46, 'JPY'), centsTyped(null, 'USD')]).toEqual(
-			['46.50', '46', '46', '']
-		);
+		expect([inCents(46.5, 'USD'), inCents(46, 'JPY'), inCents(1.005, 'KWD')]).toEqual([
+			4650, 46, 1005
+		]);
+		expect([
+			centsTyped(4650, 'USD'),
+			centsTyped(4600, 'USD'),
+			centsTyped(46, 'JPY'),
+			centsTyped(null, 'USD')
+		]).toEqual(['46.50', '46', '46', '']);
 	});
 });

@@ -3,14 +3,22 @@ import { oddPrice } from './band';
 import { ofForm, PriceForm, PriceInput } from './input';
 import { isStale, staleBefore } from './stale';
 
-const price = { kind: 'coil', engine: 'Ondrake TARN-21L', newCents: 4400, source: 'Counter book', seenOn: '2026-03-03' };
+const price = {
+	kind: 'coil',
+	engine: 'Ondrake TARN-21L',
+	newCents: 4400,
+	source: 'Counter book',
+	seenOn: '2026-03-03'
+};
 const faults = (input: object) =>
 	PriceInput.safeParse(input).error?.issues.map(({ path, message }) => [path.join('.'), message]);
 
 describe('a price', () => {
 	it('belongs to an engine or a number, and says so', () => {
 		expect(PriceInput.safeParse(price).success).toBe(true);
-		expect(PriceInput.safeParse({ ...price, engine: undefined, number: '12-345' }).success).toBe(true);
+		expect(PriceInput.safeParse({ ...price, engine: undefined, number: '12-345' }).success).toBe(
+			true
+		);
 		const words = 'Enter the engine or the part number: a price belongs to one of them';
 		expect(faults({ ...price, engine: undefined })).toEqual([['engine', words]]);
 		expect(faults({ ...price, engine: ' -. ', number: '--' })).toEqual([['engine', words]]);
@@ -37,12 +45,17 @@ describe('a price', () => {
 	it('outside what most of its kind cost is only warned of', () => {
 		const say = (cents: number) => `$${cents / 100}`;
 		expect(oddPrice({ kind: 'carb-float', newCents: 30000 }, say)).toBeNull();
-		expect(oddPrice({ kind: 'carb-float', newCents: 90000 }, say)).toContain('cost $15 to $300: this one is $900');
+		expect(oddPrice({ kind: 'carb-float', newCents: 90000 }, say)).toContain(
+			'cost $15 to $300: this one is $900'
+		);
 		expect(oddPrice({ kind: 'carb-float', newCents: 1000 }, say)).toContain('$10');
 	});
 	it('is old after the limit, the same by day and by query', () => {
 		const now = new Date('2026-09-10T12:00:00Z');
 		expect(staleBefore(now, 180)).toBe('2026-03-14');
-		expect([isStale('2026-03-14', now, 180), isStale('2026-03-13', now, 180)]).toEqual([false, true]);
+		expect([isStale('2026-03-14', now, 180), isStale('2026-03-13', now, 180)]).toEqual([
+			false,
+			true
+		]);
 	});
 });

@@ -13,7 +13,7 @@ export const movePart = (ctx: Context, tag: string, input: Move): Promise<Done &
 		const no = place.red ? null : whyNotShelf(await factsOf(tx, ctx, row));
 		if (no) throw new Refused(no.code, no.said, 'bin');
 		if (place.red && row.state === 'held')
-			throw new Refused('gate', `It is held for ${row.heldFor}. Let it go first.`, 'bin');
+			throw new Refused('gate', `It is held for ${row.heldFor}. Free it first.`, 'bin');
 		const state = row.state === 'held' ? 'held' : place.red ? 'back' : 'shelved';
 		const set = { binId: place.binId, boxId: place.boxId, state } as const;
 		return { ...(await changePart(tx, ctx, row, 'move', set, { to: place.said })), to: place.said };

@@ -6,6 +6,7 @@ import { inShop, type Context } from '../context';
 import { event } from '../people/tables';
 import {
 	editPrice,
+	findPrice,
 	getPrice,
 	listPrices,
 	listRemoved,
@@ -93,6 +94,14 @@ describe('the price list', () => {
 			id,
 			kind: 'stator'
 		});
+	});
+
+	it('finds the very one for a kind, engine and number', async () => {
+		const { id } = await putPrice(ours.ctx, input());
+		const what = { kind: 'coil', engine: 'ONDRAKE tarn 21L', number: '' };
+		expect((await findPrice(ours.ctx, what))?.id).toBe(id);
+		expect(await findPrice(ours.ctx, { ...what, number: 'N1' })).toBeNull();
+		expect(await findPrice(theirs.ctx, what)).toBeNull();
 	});
 
 	it('refuses a day that lies ahead', async () => {

@@ -2,10 +2,9 @@ import { engineKey, numberKey } from '$lib/codes/number';
 import type { PriceInput } from '$lib/prices/input';
 import { money } from '$lib/format';
 import { seenSaid } from '$lib/prices/seen';
-import { priceFor, type PriceView } from '$lib/prices/view';
-import { NotFound, Refused } from '$lib/refusal';
-import { kind } from '$lib/trade';
-import { and, eq, ne } from 'drizzle-orm';
+import type { PriceView } from '$lib/prices/view';
+import { Refused } from '$lib/refusal';
+import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
 import { getShop, record } from '../people';
@@ -16,7 +15,8 @@ type Row = typeof price.$inferSelect;
 
 const DAY = 86_400_000;
 
-function rowOf(ctx: Context, input: PriceInput) {
+/** The row of an input; a day ahead of today is refused. */
+export function rowOf(ctx: Context, input: PriceInput) {
 	if (Date.parse(input.seenOn) > ctx.now.getTime() + DAY)
 		throw new Refused(
 			'bad input',
@@ -42,10 +42,10 @@ type Values = ReturnType<typeof rowOf>;
 
 type Amounts = Pick<Row, 'newCents' | 'copyCents' | 'seenOn'>;
 
-const said = ({ newCents, copyCents, seenOn }: Amounts, currency: string) =>
+export const said = ({ newCents, copyCents, seenOn }: Amounts, currency: string) =>
 	`${money(newCents, currency)} new, ${copyCents === null ? 'no copy' : `${money(copyCents, currency)} copy`}, seen ${seenSaid(seenOn)}`;
 
-async function refuseChanged(ctx: Context, row: Row, values: Values, version?: number) {
+export async function refuseChanged(ctx: Context, row: Row, values: Values, version?: number) {
 	if (version === undefined || version === row.version) return;
 	const { currency } = await getShop(ctx);
 	throw new Refused(
@@ -54,7 +54,7 @@ async function refuseChanged(ctx: Context, row: Row, values: Values, version?: n
 	);
 }
 
-async function write(tx: Tx, ctx: Context, before: Row, values: Values): Promise<PriceView> {
+export async function write(tx: Tx, ctx: Context, before: Row, values: Values): Promise<PriceView> {
 	await tx
 		.update(price)
 		.set({ ...values, version: before.version + 1 })
@@ -68,7 +68,7 @@ async function write(tx: Tx, ctx: Context, before: Row, values: Values): Promise
 	return getPrice(ctx, before.id);
 }
 
-const sameAs = (ctx: Context, values: Values) =>
+export const sameAs = (ctx: Context, values: Values) =>
 	and(
 		eq(price.shopId, ctx.shopId),
 		eq(price.kind, values.kind),
@@ -94,28 +94,5 @@ export const putPrice = (ctx: Context, input: PriceInput): Promise<PriceView> =>
 		if (!before)
 			throw new Refused('changed', 'This price was taken off the list just now. Save again.');
 		await refuseChanged(ctx, before, values, input.version);
-		return write(tx, ctx, before, values);
-	});
-
-/** Changes a price that is on the list; what it is for may change with it. */
-export const editPrice = (ctx: Context, id: number, input: PriceInput): Promise<PriceView> =>
-	inShop(ctx, async (tx, ctx) => {
-		const values = rowOf(ctx, input);
-		const [before] = await tx
-			.select()
-			.from(price)
-			.where(and(eq(price.shopId, ctx.shopId), eq(price.id, id)))
-			.for('update');
-		if (!before) throw new NotFound('This price is not on the list any more');
-		await refuseChanged(ctx, before, values, input.version);
-		const [twin] = await tx
-			.select()
-			.from(price)
-			.where(and(sameAs(ctx, values), ne(price.id, id)));
-		if (twin)
-			throw new Refused(
-				'taken',
-				`There is a price for ${kind(twin.kind).name}, ${priceFor(twin)} already: ${said(twin, (await getShop(ctx)).currency)}. Change that one.`
-			);
 		return write(tx, ctx, before, values);
 	});

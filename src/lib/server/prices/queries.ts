@@ -1,3 +1,4 @@
+import { engineKey, numberKey } from '$lib/codes/number';
 import { isStale } from '$lib/prices/stale';
 import type { PriceView } from '$lib/prices/view';
 import { NotFound } from '$lib/refusal';
@@ -82,4 +83,24 @@ export const pricedEngines = (ctx: Context): Promise<string[]> =>
 			.orderBy(price.engineKey)
 			.limit(500);
 		return rows.map(({ engine }) => engine);
+	});
+
+/** The price of just this kind, engine and number, or null. */
+export const findPrice = (
+	ctx: Context,
+	what: { kind: string; engine: string; number: string }
+): Promise<PriceView | null> =>
+	inShop(ctx, async (tx, ctx) => {
+		const [row] = await tx
+			.select()
+			.from(price)
+			.where(
+				and(
+					eq(price.shopId, ctx.shopId),
+					eq(price.kind, what.kind),
+					eq(price.engineKey, engineKey(what.engine)),
+					eq(price.numberKey, numberKey(what.number))
+				)
+			);
+		return row ? viewOf(row, ctx, (await getPolicy(ctx)).staleDays) : null;
 	});

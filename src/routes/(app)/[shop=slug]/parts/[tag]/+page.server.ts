@@ -40,7 +40,7 @@ const causesOf = ({ kind, donorOf }: PartView) =>
 
 export const actions = {
 	free: action('hold', Nothing, async (ctx, _input, event: RequestEvent) =>
-		after(event, await freePart(ctx, event.params.tag), 'Let go again')
+		after(event, await freePart(ctx, event.params.tag), 'Freed')
 	),
 	miss: action('work', Nothing, async (ctx, _input, event: RequestEvent) =>
 		after(event, await missPart(ctx, event.params.tag), 'Noted as missing')

@@ -3,12 +3,14 @@ import { ownPath } from '$lib/people/own-path';
 import { oddPrice } from '$lib/prices/band';
 import { ofForm, PriceForm } from '$lib/prices/input';
 import { action, getShop, page } from '$lib/server/people';
-import { pricedEngines, putPrice } from '$lib/server/prices';
+import { findPrice, pricedEngines, putPrice } from '$lib/server/prices';
 
 export const load = page('trade', async (ctx, { url, params }) => {
 	const ask = (name: string) => url.searchParams.get(name) ?? '';
+	const asked = { kind: ask('kind'), engine: ask('engine'), number: ask('number') };
+	const known = await findPrice(ctx, asked);
 	return {
-		start: { kind: ask('kind'), engine: ask('engine'), number: ask('number') },
+		start: known ? { ...known, seenOn: undefined } : asked,
 		goBack: ask('back'),
 		engines: await pricedEngines(ctx),
 		today: ctx.now.toISOString().slice(0, 10),

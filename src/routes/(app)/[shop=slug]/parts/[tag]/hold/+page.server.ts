@@ -16,7 +16,3 @@ export const actions = {
 		const until = date(done.until, (await getShop(ctx)).timeZone);
 		return after(event, done, `Held for ${input.for} until ${until}`);
 	}),
-	free: action('hold', Nothing, async (ctx, _input, event: RequestEvent) =>
-		after(event, await freePart(ctx, event.params.tag), 'Let go again')
-	)
-};
