@@ -7,7 +7,7 @@ const ROUTES = 'src/routes';
 const OUTSIDE = ['(public)', '(auth)', 'theme', 'livez', 'readyz', 'api/openapi.json'];
 const SAYS_WHO = /\/\*\*[^/]*(open to|for whoever)/i;
 const KEEPERS =
-	/^(page|action|read|change|changeWithPhoto|visitorAction)(<\w+>)?\(\s*'(see|see terms|see costs|work|hold|trade|run)'/;
+	/^(page|action|read|change|changeWithPhoto|actionWithPhotos|visitorAction)(<\w+>)?\(\s*'(see|see terms|see costs|work|hold|trade|run)'/;
 
 const serverFiles = readdirSync(ROUTES, { recursive: true, encoding: 'utf8' })
 	.filter((file) => /\+(page|layout)?\.?server\.ts$/.test(file))

@@ -15,6 +15,7 @@ export default defineConfig({
 		locale: 'en-US',
 		timezoneId: 'America/Chicago',
 		trace: 'retain-on-failure',
+		actionTimeout: 10_000,
 		launchOptions: {
 			...(CHROMIUM_PATH ? { executablePath: CHROMIUM_PATH } : {}),
 			args: ['--no-sandbox']

@@ -1,4 +1,4 @@
-import { expect, signIn, test } from '../support/browser';
+import { expect, ready, signIn, test } from '../support/browser';
 
 test('the answer comes while typing, the address keeps step, and a stale answer never covers a newer', async ({
 	page
@@ -34,6 +34,7 @@ test('the answer comes while typing, the address keeps step, and a stale answer 
 test('filters are links with counts, kept in the address', async ({ page }) => {
 	await signIn(page, 'reader');
 	await page.goto('/osiergate/parts?q=k3');
+	await ready(page);
 	await page.getByText('Narrow down').click();
 	const chip = page.getByRole('navigation', { name: 'By grade' }).getByRole('link').first();
 	const count = Number(/(\d+)\s*$/.exec(await chip.innerText())?.[1]);

@@ -1,5 +1,8 @@
 import { expect, letterTo, signIn, test } from '../support/browser';
 
+// A refusal answers with a status that the browser notes.
+test.use({ expectedComplaints: [/status of 4\d\d/] });
+
 const stamp = Date.now().toString(36);
 const phrase = 'a bench under the window';
 

@@ -1,4 +1,4 @@
-import { CAUSES, ENGINE_CLASSES, FITTINGS } from '$lib/trade';
+import { CAUSES, ENGINE_CLASSES, FITTINGS, SAFE_TICKS } from '$lib/trade';
 import { FITTING_SAID } from './fittings';
 
 const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
@@ -20,3 +20,5 @@ export const fittingOptions = FITTINGS.map((fitting) => ({
 	value: fitting as string,
 	label: capital(FITTING_SAID[fitting])
 }));
+
+export const donorOptions = { causeOptions, classOptions, fittingOptions, ticks: SAFE_TICKS };

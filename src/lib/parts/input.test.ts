@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { EditForm, Hold, LogForm, Pull, SellForm } from './input';
+import { EditForm, LogForm, SellForm } from './form';
+import { Hold, Pull } from './input';
 
 const faults = (result: { error?: { issues: { message: string }[] } | undefined }) =>
 	result.error?.issues.map((issue) => issue.message) ?? [];

@@ -1,10 +1,9 @@
 import { z } from 'zod';
-import { ownPath } from '../people/own-path';
-import { typedAmount } from '../people/typed-money';
 import { isKindId } from '../trade';
 import { GRADES, PROOFS } from './words';
 
-const words = (most: number) => z.string().trim().max(most, `Keep it under ${most} characters`);
+export const words = (most: number) =>
+	z.string().trim().max(most, `Keep it under ${most} characters`);
 const said = (ask: string, most = 120) =>
 	z.string({ error: ask }).trim().min(1, ask).max(most, `Keep it under ${most} characters`);
 
@@ -33,7 +32,7 @@ const ticks = z
 	.union([z.string(), z.array(z.string())])
 	.transform((ticked) => (typeof ticked === 'string' ? [ticked] : ticked));
 
-const yesNo = z
+export const yesNo = z
 	.union([z.boolean(), z.enum(['yes', 'no', 'true', 'false', 'on'])])
 	.transform((typed) => typed === true || typed === 'yes' || typed === 'true' || typed === 'on');
 
@@ -52,7 +51,7 @@ export const Scrap = z.object({
 });
 export type Scrap = z.infer<typeof Scrap>;
 
-const logged = {
+export const logged = {
 	kind: kindId,
 	grade: grade.optional(),
 	label: words(120).optional(),
@@ -68,9 +67,9 @@ const logged = {
 	scrapped: Scrap.optional()
 };
 
-const gradeOrScrap = (input: { grade?: unknown; scrapped?: unknown }) =>
+export const gradeOrScrap = (input: { grade?: unknown; scrapped?: unknown }) =>
 	input.grade !== undefined || input.scrapped !== undefined;
-const ASK_GRADE = { error: 'Choose a grade', path: ['grade'] };
+export const ASK_GRADE = { error: 'Choose a grade', path: ['grade'] };
 
 export const Pull = z.object(logged).refine(gradeOrScrap, ASK_GRADE);
 export type Pull = z.infer<typeof Pull>;
@@ -79,33 +78,6 @@ export const OldStock = z
 	.object({ ...logged, engine: words(120).optional() })
 	.refine(gradeOrScrap, ASK_GRADE);
 export type OldStock = z.infer<typeof OldStock>;
-
-/** The same, as a flat form sends it: the proof's fields beside the others, `scrap` a button. */
-export const LogForm = z
-	.object({
-		...logged,
-		proof: z.undefined().optional(),
-		scrapped: z.undefined().optional(),
-		engine: words(120).optional(),
-		how: Proof.shape.how.optional(),
-		figure: Proof.shape.figure,
-		unit: Proof.shape.unit,
-		passed: yesNo.optional(),
-		scrap: z.enum(['scrap', 'destroy']).optional(),
-		reason: words(120).optional()
-	})
-	.transform(({ how, figure, unit, passed, scrap, reason, ...rest }) => ({
-		...rest,
-		proof: how ? { how, figure, unit, passed: passed ?? true } : undefined,
-		scrapped: scrap
-			? {
-					reason: reason ?? (scrap === 'destroy' ? 'destroyed, not safe' : 'not worth keeping'),
-					destroyed: scrap === 'destroy'
-				}
-			: undefined
-	}))
-	.refine(gradeOrScrap, ASK_GRADE);
-export type LogForm = z.infer<typeof LogForm>;
 
 export const Move = z.object({ bin });
 export type Move = z.infer<typeof Move>;
@@ -126,18 +98,6 @@ export const Edit = z.object({
 	engine: words(120).optional()
 });
 export type Edit = z.infer<typeof Edit>;
-
-/** A form leaves out what was emptied, so there everything absent is empty. */
-export const EditForm = Edit.transform((typed) => ({
-	label: '',
-	numbers: [],
-	massGrams: null,
-	note: '',
-	set: '',
-	setMissing: '',
-	engine: '',
-	...typed
-}));
 
 export const Hold = z.object({
 	for: said('Say who or which job it is held for', 80),
@@ -164,23 +124,5 @@ export const Sell = z.object({
 });
 export type Sell = z.infer<typeof Sell>;
 
-/** The price as people type it: 46, 46.50 or 46,50. */
-export const SellForm = z.object({
-	price: z.string({ error: 'Enter what it was sold for' }).transform((typed, issues) => {
-		const amount = typedAmount(typed);
-		if (amount !== null && amount <= 1_000_000) return amount;
-		issues.addIssue('Enter the price like 46 or 46.50');
-		return z.NEVER;
-	}),
-	to: words(80).optional()
-});
-export type SellForm = z.infer<typeof SellForm>;
-
 export const TakeBack = z.object({ reason: said('Say why it came back') });
 export type TakeBack = z.infer<typeof TakeBack>;
-
-export const Undo = z.object({
-	event: z.coerce.number().int().positive(),
-	back: z.string().default('/').transform(ownPath)
-});
-export type Undo = z.infer<typeof Undo>;

@@ -1,57 +1,8 @@
 import { kind } from '../trade';
+import { isMove, leads, MOVES, type Arrows, type Move } from './moves';
 import type { PartState } from './words';
 
-/** Before a part is logged it is nowhere. */
-type From = PartState | 'none';
-
-const HERE = ['pulled', 'shelved', 'held', 'back', 'missing'] as const;
-const stays = (states: readonly PartState[]) =>
-	Object.fromEntries(states.map((state) => [state, [state]])) as Partial<Record<From, PartState[]>>;
-
-/** What may happen to a part: for every move, from which state to which. The one table. */
-export const MOVES = {
-	pull: { none: ['pulled', 'shelved', 'back', 'scrapped'] },
-	move: {
-		pulled: ['shelved', 'back'],
-		shelved: ['shelved', 'back'],
-		held: ['held'],
-		back: ['back', 'shelved'],
-		missing: ['shelved', 'back']
-	},
-	grade: stays(HERE),
-	edit: stays([...HERE, 'out']),
-	photo: stays([...HERE, 'out', 'scrapped']),
-	prove: {
-		pulled: ['pulled', 'back'],
-		shelved: ['shelved', 'back'],
-		held: ['held', 'back'],
-		back: ['back']
-	},
-	hold: { pulled: ['held'], shelved: ['held'] },
-	free: { held: ['pulled', 'shelved'] },
-	fit: { pulled: ['out'], shelved: ['out'], held: ['out'] },
-	sell: { pulled: ['out'], shelved: ['out'], held: ['out'] },
-	'take back': { out: ['back'] },
-	scrap: {
-		pulled: ['scrapped'],
-		shelved: ['scrapped'],
-		held: ['scrapped'],
-		back: ['scrapped'],
-		missing: ['scrapped']
-	},
-	miss: { pulled: ['missing'], shelved: ['missing'], held: ['missing'], back: ['missing'] },
-	find: { missing: ['pulled', 'shelved', 'back'] }
-} satisfies Record<string, Partial<Record<From, readonly PartState[]>>>;
-
-export type Move = keyof typeof MOVES;
-
-export const isMove = (word: string): word is Move => Object.hasOwn(MOVES, word);
-
-/** May this move lead from here to there? */
-export function leads(move: Move, from: PartState | null, to: PartState): boolean {
-	const arrows: Partial<Record<From, readonly PartState[]>> = MOVES[move];
-	return arrows[from ?? 'none']?.includes(to) ?? false;
-}
+export { isMove, leads, MOVES, type Move };
 
 /** What a rule needs to know about a part. */
 export interface PartFacts {
@@ -78,7 +29,7 @@ const NOT_HERE: Record<PartState, string> = {
 
 /** Why a move is shut, or null when it is open. Whether a bin is red is `whyNotShelf`'s business. */
 export function whyNot(move: Move, part: PartFacts): No | null {
-	const arrows: Partial<Record<From, readonly PartState[]>> = MOVES[move];
+	const arrows: Arrows = MOVES[move];
 	if (!arrows[part.state]) {
 		return { code: part.state === 'back' ? 'gate' : 'taken', said: NOT_HERE[part.state] };
 	}

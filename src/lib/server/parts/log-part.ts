@@ -1,4 +1,3 @@
-import { engineKey } from '$lib/codes/number';
 import type { Pull } from '$lib/parts/input';
 import { unticked } from '$lib/parts/keeping';
 import type { PartState } from '$lib/parts/words';
@@ -6,28 +5,18 @@ import { kind } from '$lib/trade';
 import { Refused } from '$lib/refusal';
 import type { Context } from '../context';
 import type { Tx } from '../db';
-import type { donor } from '../donors/tables';
-import type { KeptPhoto } from '../photos';
 import { mintTag } from '../tags';
 import { chanceOn } from './chance-on';
-import { keysOf } from './edit';
+import { insertPart, type Origin } from './insert-part';
 import { hangKept } from './photo';
 import { placeNamed, redPlace, type Place } from './place';
 import { writeProof } from './prove';
-import { recordPart, wordsOf, type Done } from './row';
-import { part } from './tables';
+import { recordPart, type Done } from './row';
 
 export interface Logged extends Done {
 	id: number;
 	state: PartState;
 	to: string | null;
-}
-
-export interface Origin {
-	donor: typeof donor.$inferSelect | null;
-	engine: string;
-	/** Pictures that are in the store already. */
-	kept?: readonly KeptPhoto[];
 }
 
 /** Never-reuse kinds and ruined ones become no stock; safety kinds only with every tick of their list. */
@@ -75,47 +64,4 @@ export async function logPart(tx: Tx, ctx: Context, input: Pull, origin: Origin)
 	};
 	const eventId = await recordPart(tx, ctx, { id, state: null }, 'pull', state, detail);
 	return { id, tag, eventId, state, to: place?.said ?? null };
-}
-
-interface NewPart {
-	input: Pull;
-	origin: Origin;
-	place: Place | null;
-	state: PartState;
-	tag: string;
-}
-
-async function insertPart(tx: Tx, ctx: Context, { input, origin, place, state, tag }: NewPart) {
-	const numbers = input.numbers ?? [];
-	const from = origin.donor;
-	const row = {
-		shopId: ctx.shopId,
-		tag,
-		kind: input.kind,
-		donorId: from?.id ?? null,
-		engine: from ? '' : origin.engine,
-		engineKey: from ? from.engineKey : engineKey(origin.engine),
-		grade: input.grade ?? 'core',
-		state,
-		binId: place?.binId ?? null,
-		boxId: place?.boxId ?? null,
-		label: input.label ?? '',
-		numbers,
-		numberKeys: keysOf(numbers),
-		set: input.set ?? '',
-		setMissing: input.setMissing ?? '',
-		checklist: input.checklist ?? [],
-		massGrams: input.massGrams ?? null,
-		note: input.note ?? '',
-		scrapReason: input.scrapped?.reason ?? null,
-		destroyed: input.scrapped?.destroyed ?? false,
-		pulledAt: ctx.now,
-		changedAt: ctx.now
-	};
-	const searchText = await wordsOf(tx, ctx, row);
-	const [made] = await tx
-		.insert(part)
-		.values({ ...row, searchText })
-		.returning({ id: part.id });
-	return made!.id;
 }

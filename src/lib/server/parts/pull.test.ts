@@ -3,7 +3,11 @@ import { NotFound } from '$lib/refusal';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { bin, donorOnBench } from '../../../../tests/support/bench';
 import { testShops, type TestShop } from '../../../../tests/support/shops';
-import { finishDonor, takeIn } from '../donors';
+import { editDonor, finishDonor, getDonor, takeIn } from '../donors';
+import { followDonor } from './follow-donor';
+import { inShop } from '../context';
+import { part } from './tables';
+import { eq } from 'drizzle-orm';
 import { getPart, kindsStillOn, listDonorParts, logOldStock, partsByIds, pullPart } from '.';
 
 let ours: TestShop, theirs: TestShop, donor: string;
@@ -160,6 +164,19 @@ describe('what is still on a donor', () => {
 		expect(first).toBeGreaterThan(0);
 		expect(rows.slice(first).every((row) => row.never !== null)).toBe(true);
 		expect(rows.every((row) => row.minutes >= 0)).toBe(true);
+	});
+});
+
+describe('a donor that is read better later', () => {
+	it('takes its parts along: what they are found and priced by', async () => {
+		const late = await donorOnBench(ours.ctx, { maker: '', model: 'TWIN-7?U' });
+		const { tag } = await pullPart(ours.ctx, late, { kind: 'coil', grade: 'usable' });
+		await editDonor(ours.ctx, late, { maker: 'Grauvik', model: 'TWIN-72U' });
+		await followDonor(theirs.ctx, (await getDonor(ours.ctx, late)).id);
+		await followDonor(ours.ctx, (await getDonor(ours.ctx, late)).id);
+		const [row] = await inShop(ours.ctx, (tx) => tx.select().from(part).where(eq(part.tag, tag)));
+		expect(row).toMatchObject({ engineKey: 'grauviktwin72u' });
+		expect(row!.searchText).toContain('grauvik twin-72u');
 	});
 });
 

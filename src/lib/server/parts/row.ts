@@ -1,16 +1,15 @@
 import { readTag } from '$lib/codes';
 import { isMove, leads, whyNot, type Move, type PartFacts } from '$lib/parts/state';
-import { searchText } from '$lib/parts/search-text';
 import type { PartState } from '$lib/parts/words';
 import { NotFound, Refused } from '$lib/refusal';
 import { and, eq } from 'drizzle-orm';
 import type { Context } from '../context';
 import type { Tx } from '../db';
-import { donor } from '../donors/tables';
 import { record } from '../people';
 import { isDoubtful } from './doubt';
 import { part } from './tables';
 import { takenWords } from './taken';
+import { WORDED, wordsOf } from './words-of';
 
 export type PartRow = typeof part.$inferSelect;
 
@@ -50,22 +49,6 @@ export async function partFor(tx: Tx, ctx: Context, tag: string, move: Move): Pr
 	const no = whyNot(move, await factsOf(tx, ctx, row));
 	if (!no) return row;
 	throw new Refused(no.code, no.code === 'taken' ? await takenWords(tx, ctx, row) : no.said);
-}
-
-const WORDED = ['label', 'numbers', 'note', 'engine', 'set', 'kind'] as const;
-
-/** The search words of a part as it would be with these changes. */
-export async function wordsOf(
-	tx: Tx,
-	ctx: Context,
-	row: Pick<PartRow, (typeof WORDED)[number] | 'donorId'>
-) {
-	if (row.donorId === null) return searchText(row, null);
-	const [from] = await tx
-		.select()
-		.from(donor)
-		.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, row.donorId)));
-	return searchText(row, from ?? null);
 }
 
 /**

@@ -1,4 +1,4 @@
-import { Undo } from '$lib/parts/input';
+import { Undo } from '$lib/parts/form';
 import { action, page } from '$lib/server/people';
 import { undoPart } from '$lib/server/parts';
 

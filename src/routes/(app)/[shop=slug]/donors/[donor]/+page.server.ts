@@ -1,32 +1,28 @@
 import { DonorEditForm } from '$lib/donors/form';
-import { CauseForm, ReleaseInput, SafeInput } from '$lib/donors/input';
-import { causeOptions, classOptions, fittingOptions } from '$lib/donors/options';
 import {
-	addBox,
-	editDonor,
-	getDonor,
-	listMakers,
-	releaseDonor,
-	tickSafe,
-	todayIn
-} from '$lib/server/donors';
+	CauseForm,
+	MoveInput,
+	PhotoRef,
+	ReleaseInput,
+	SafeInput,
+	ShotInput
+} from '$lib/donors/input';
+import { donorOptions } from '$lib/donors/options';
+import * as donors from '$lib/server/donors';
 import { action, page } from '$lib/server/people';
-import { SAFE_TICKS } from '$lib/trade';
+import { actionWithPhotos } from '$lib/server/photos';
 import { z } from 'zod';
 import type { PageServerLoadEvent, RequestEvent } from './$types';
-import { back, moves } from './moves';
-import { photos } from './photos';
+import { back, moved } from './moves';
+import { addPhotos, putBackPhoto, removePhoto } from './photos';
 
 export const load = page('see', async (ctx, { params, url }: PageServerLoadEvent) => {
-	const donor = await getDonor(ctx, params.donor);
+	const donor = await donors.getDonor(ctx, params.donor);
 	return {
 		donor,
-		today: await todayIn(ctx),
-		makers: await listMakers(ctx),
-		causeOptions,
-		classOptions,
-		fittingOptions,
-		ticks: SAFE_TICKS,
+		today: await donors.todayIn(ctx),
+		makers: await donors.listMakers(ctx),
+		...donorOptions,
 		removed: url.searchParams.get('removed'),
 		back: { href: `/${params.shop}/donors`, label: 'Donors' },
 		short: `${donor.number} · ${donor.tag}`
@@ -34,26 +30,31 @@ export const load = page('see', async (ctx, { params, url }: PageServerLoadEvent
 });
 
 export const actions = {
-	...moves,
-	...photos,
+	strip: action('work', MoveInput, moved(donors.stripDonor, 'On the bench')),
+	park: action('work', MoveInput, moved(donors.parkDonor, 'Parked')),
+	finish: action('work', MoveInput, moved(donors.finishDonor, 'Stripped')),
+	reopen: action('work', MoveInput, moved(donors.reopenDonor, 'Reopened')),
+	photos: actionWithPhotos('work', ShotInput, 'file', addPhotos),
+	removePhoto: action('work', PhotoRef, removePhoto),
+	putBackPhoto: action('work', PhotoRef, putBackPhoto),
 	cause: action('work', CauseForm, async (ctx, input, event: RequestEvent) => {
-		await editDonor(ctx, event.params.donor, input);
+		await donors.editDonor(ctx, event.params.donor, input);
 		return back(event, 'Cause of death saved');
 	}),
 	release: action('work', ReleaseInput, async (ctx, input, event: RequestEvent) => {
-		await releaseDonor(ctx, event.params.donor, input);
+		await donors.releaseDonor(ctx, event.params.donor, input);
 		return back(event, 'Release recorded');
 	}),
 	safe: action('work', SafeInput, async (ctx, input, event: RequestEvent) => {
-		await tickSafe(ctx, event.params.donor, input);
+		await donors.tickSafe(ctx, event.params.donor, input);
 		return back(event, 'Ticks saved');
 	}),
 	edit: action('work', DonorEditForm, async (ctx, input, event: RequestEvent) => {
-		await editDonor(ctx, event.params.donor, input);
+		await donors.editDonor(ctx, event.params.donor, input);
 		return back(event, 'Saved');
 	}),
 	box: action('work', z.object({}), async (ctx, _input, event: RequestEvent) => {
-		const { tag } = await addBox(ctx, event.params.donor);
+		const { tag } = await donors.addBox(ctx, event.params.donor);
 		return back(event, `Another box: ${tag}`);
 	})
 };

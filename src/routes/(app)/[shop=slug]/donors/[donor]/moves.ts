@@ -1,6 +1,6 @@
-import { MoveInput } from '$lib/donors/input';
-import { finishDonor, parkDonor, reopenDonor, stripDonor } from '$lib/server/donors';
-import { action } from '$lib/server/people';
+import type { MoveInput } from '$lib/donors/input';
+import type { Context } from '$lib/server/context';
+import type { stripDonor } from '$lib/server/donors';
 import type { RequestEvent } from './$types';
 
 /** Back to the donor, saying what was done. */
@@ -8,15 +8,10 @@ export const back = ({ params }: RequestEvent, done: string, more = '') => ({
 	to: `/${params.shop}/donors/${params.donor}?done=${encodeURIComponent(done)}${more}`
 });
 
-const move = (verb: typeof stripDonor, done: string) =>
-	action('work', MoveInput, async (ctx, input, event: RequestEvent) => {
+/** One step on the donor's way, then back to its page. */
+export const moved =
+	(verb: typeof stripDonor, done: string) =>
+	async (ctx: Context, input: MoveInput, event: RequestEvent) => {
 		await verb(ctx, event.params.donor, input);
 		return back(event, done);
-	});
-
-export const moves = {
-	strip: move(stripDonor, 'On the bench'),
-	park: move(parkDonor, 'Parked'),
-	finish: move(finishDonor, 'Stripped'),
-	reopen: move(reopenDonor, 'Reopened')
-};
+	};

@@ -1,4 +1,4 @@
-import { LogForm } from '$lib/parts/input';
+import { LogForm } from '$lib/parts/form';
 import { foundKinds, loggedSaid } from '$lib/parts/logging';
 import { page } from '$lib/server/people';
 import { chanceOn, logOldStock, usualKinds } from '$lib/server/parts';

@@ -1,6 +1,6 @@
 import { canPull } from '$lib/donors/state';
 import { plural } from '$lib/format';
-import { LogForm } from '$lib/parts/input';
+import { LogForm } from '$lib/parts/form';
 import { foundKinds, loggedSaid } from '$lib/parts/logging';
 import { getDonor, todayIn } from '$lib/server/donors';
 import { page } from '$lib/server/people';

@@ -1,4 +1,4 @@
-import { EditForm } from '$lib/parts/input';
+import { EditForm } from '$lib/parts/form';
 import { editPart } from '$lib/server/parts';
 import { action, page } from '$lib/server/people';
 import { after, loadSheet } from '../sheet';

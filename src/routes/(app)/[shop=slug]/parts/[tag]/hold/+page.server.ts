@@ -1,6 +1,6 @@
-import { Hold, Nothing } from '$lib/parts/input';
 import { date } from '$lib/format';
-import { freePart, holdPart, recentFor } from '$lib/server/parts';
+import { Hold } from '$lib/parts/input';
+import { holdPart, recentFor } from '$lib/server/parts';
 import { action, getShop, page } from '$lib/server/people';
 import { after, loadSheet } from '../sheet';
 import type { PageServerLoadEvent, RequestEvent } from './$types';
@@ -11,8 +11,9 @@ export const load = page('hold', async (ctx, event: PageServerLoadEvent) => ({
 }));
 
 export const actions = {
-	hold: action('hold', Hold, async (ctx, input, event: RequestEvent) => {
+	default: action('hold', Hold, async (ctx, input, event: RequestEvent) => {
 		const done = await holdPart(ctx, event.params.tag, input);
 		const until = date(done.until, (await getShop(ctx)).timeZone);
 		return after(event, done, `Held for ${input.for} until ${until}`);
-	}),
+	})
+};

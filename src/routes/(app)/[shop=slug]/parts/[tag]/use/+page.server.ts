@@ -1,4 +1,5 @@
-import { Fit, SellForm } from '$lib/parts/input';
+import { SellForm } from '$lib/parts/form';
+import { Fit } from '$lib/parts/input';
 import { canSell } from '$lib/parts/state';
 import { centsTyped, inCents } from '$lib/people/typed-money';
 import { fitPart, recentFor, sellPart } from '$lib/server/parts';
