@@ -83,12 +83,14 @@ const guard: Handle = async ({ event, resolve }) => {
 };
 
 const secure: Handle = async ({ event, resolve }) => {
-	const response = await resolve(event, {
+	const answer = await resolve(event, {
 		transformPageChunk: ({ html }) =>
 			html.replace('<html lang="en">', `<html lang="en"${theme(event)}>`),
 		preload: ({ type, path }) =>
 			type === 'js' || type === 'css' || path.includes('archivo-latin-wdth')
 	});
+	// A redirect's headers cannot be added to: answer with a copy.
+	const response = new Response(answer.body, answer);
 	for (const [name, value] of headers()) response.headers.set(name, value);
 	if (!response.headers.has('Content-Security-Policy'))
 		response.headers.set('Content-Security-Policy', BARE_POLICY);

@@ -59,12 +59,13 @@ async function weigh(path) {
 		storageState: await page.context().storageState()
 	});
 	const fresh = await context.newPage();
-	let bytes = 0;
-	fresh.on('response', async (response) => {
-		if (response.request().resourceType() !== 'script' || !response.ok()) return;
-		bytes += gzipSync(await response.body()).length;
+	/** @type {Promise<Buffer>[]} */
+	const scripts = [];
+	fresh.on('response', (response) => {
+		if (new URL(response.url()).pathname.endsWith('.js')) scripts.push(response.body());
 	});
 	await fresh.goto(base + path, { waitUntil: 'networkidle' });
+	const bodies = await Promise.all(scripts);
 	await context.close();
-	return bytes;
+	return bodies.reduce((sum, body) => sum + gzipSync(body).length, 0);
 }

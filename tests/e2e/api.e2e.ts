@@ -109,7 +109,8 @@ test('a donor comes in, gives its parts, and they are priced, found, proved and 
 	const shut = await change(bench, `${D}/strip`, {}, 409);
 	expect(shut).toMatchObject({ code: 'gate', message: expect.stringContaining('release') });
 	await change(bench, `${D}/release`, { route: 'own', on: day });
-	await makeSafe(donor.number);
+	const safeTicks = ['fuel', 'bowl', 'oil', 'battery', 'blade', 'plug', 'openings'];
+	expect(await change(bench, D, { safeTicks }, 200, 'patch')).toMatchObject({ safeTicks });
 	expect(await change(bench, `${D}/strip`, {})).toMatchObject({ state: 'on the bench' });
 
 	const pull = (body: object) => change(bench, `${D}/parts`, body, 201);
@@ -150,23 +151,6 @@ test('a donor comes in, gives its parts, and they are priced, found, proved and 
 	expect(await look(reader, `tags/${recoil.tag}`)).toMatchObject({ what: 'part' });
 	expect(await look(reader, `tags/${donor.tag}`)).toMatchObject({ what: 'box' });
 });
-
-/** The safe ticks are set on the donor's page. */
-async function makeSafe(donor: string) {
-	const page = await visitor('bench@osiergate.example');
-	const { version } = await look(bench, `donors/${donor}`);
-	const ticks = ['fuel', 'bowl', 'oil', 'battery', 'blade', 'plug', 'openings'];
-	const form = new FormData();
-	form.set('idempotencyKey', randomUUID());
-	form.set('version', String(version));
-	for (const tick of ticks) form.append('ticks', tick);
-	const answer = await page.post(`/osiergate/donors/${donor}?/safe`, {
-		headers: { accept: 'text/html' },
-		multipart: form
-	});
-	expect(answer.status(), await answer.text()).toBe(303);
-	await page.dispose();
-}
 
 test('the calculator gives a gain and says what is wrong with a figure', async () => {
 	const figures = {

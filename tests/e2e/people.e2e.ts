@@ -54,7 +54,7 @@ test('a shop is opened, somebody invited, and shut out again at once', async ({
 		.locator('.card', { hasText: 'Corin Ash' })
 		.getByRole('button', { name: 'Shut out' })
 		.click();
-	await expect(page.getByText('shut out')).toBeVisible();
+	await expect(page.getByText('shut out', { exact: true })).toBeVisible();
 	const answer = await bench.goto(`/${home}/parts`);
 	expect(answer?.status()).toBe(404);
 });

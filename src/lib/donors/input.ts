@@ -43,6 +43,7 @@ const what = {
 	secondCause: cause.nullable(),
 	sureness: sureness.nullable(),
 	paidCents: cents,
+	safeTicks: z.array(idOf(SAFE_TICKS, 'Choose ticks from the list')),
 	note: words('the note', 2000)
 };
 
