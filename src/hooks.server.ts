@@ -1,13 +1,13 @@
 import { building } from '$app/environment';
 import { NotFound } from '$lib/refusal';
-import type { Context } from '$lib/server/context';
-import { closeDb, db } from '$lib/server/db';
+import { closeDb } from '$lib/server/db';
 import { env } from '$lib/server/env';
 import { BARE_POLICY, headers } from '$lib/server/http/headers';
 import { notHere } from '$lib/server/http/not-here';
+import { fromElsewhere } from '$lib/server/http/origin';
 import { tasks } from '$lib/server/jobs';
 import { log } from '$lib/server/log';
-import { authHandle, keyHolder, shopsOf } from '$lib/server/people';
+import { authHandle, identify } from '$lib/server/people';
 import { startQueue, stopQueue } from '$lib/server/queue';
 import {
 	json,
@@ -30,40 +30,17 @@ export const init: ServerInit = async () => {
 	});
 };
 
-/** Who is it: a person with a session, or a script with a key. */
-const identify: Handle = async ({ event, resolve }) => {
-	event.locals.db = db();
-	event.locals.person = null;
-	event.locals.ctx = null;
-	event.locals.shops = [];
-	const key = event.request.headers.get('authorization')?.match(/^Bearer (\S+)$/i)?.[1];
-	if (key) await identifyKey(event, key);
-	else await identifyPerson(event);
+/** Only our own pages change anything with a visitor's cookie. */
+const ownPages: Handle = ({ event, resolve }) =>
+	fromElsewhere(event)
+		? json({ code: 'role', message: 'Changes are taken from our own pages only.' }, { status: 403 })
+		: resolve(event);
+
+/** Who is it, and for which shop: once a request. */
+const identified: Handle = async ({ event, resolve }) => {
+	await identify(event);
 	return resolve(event);
 };
-
-async function identifyPerson(event: RequestEvent) {
-	const user = (await event.locals.auth())?.user;
-	if (!user?.id || !user.email) return;
-	event.locals.person = { id: user.id, name: user.name ?? user.email, email: user.email };
-	const shops = await shopsOf(db(), user.id);
-	event.locals.shops = shops.map(({ slug, name, role }) => ({ slug, name, role }));
-	const here = shops.find((shop) => shop.slug === event.params.shop?.toLowerCase());
-	if (here) event.locals.ctx = contextOf(here);
-}
-
-async function identifyKey(event: RequestEvent, key: string) {
-	const holder = await keyHolder(db(), key);
-	if (holder && holder.slug === event.params.shop) event.locals.ctx = contextOf(holder);
-}
-
-const contextOf = (here: Pick<Context, 'shopId' | 'memberId' | 'role'>): Context => ({
-	db: db(),
-	shopId: here.shopId,
-	memberId: here.memberId,
-	role: here.role,
-	now: new Date()
-});
 
 /** A shop's address opens to its members; to others it is as if it were not there. */
 const guard: Handle = async ({ event, resolve }) => {
@@ -104,7 +81,7 @@ const theme = (event: RequestEvent) => {
 	return chosen && THEMES.includes(chosen) ? ` data-theme="${chosen}"` : '';
 };
 
-export const handle = sequence(secure, authHandle, identify, guard);
+export const handle = sequence(secure, ownPages, authHandle, identified, guard);
 
 export const handleError: HandleServerError = ({ error, event, status, message }) => {
 	if (status === 404) return { message: 'This page is not here. Look at the address, or go back.' };

@@ -1,3 +1,4 @@
+import type { Ability } from '../people/role';
 import type { PartState } from './words';
 
 /** Before a part is logged it is nowhere. */
@@ -45,6 +46,24 @@ export const MOVES = {
 } satisfies Record<string, Arrows>;
 
 export type Move = keyof typeof MOVES;
+
+/** What a member must be allowed to make a move. */
+export const NEEDS: Record<Move, Ability> = {
+	pull: 'work',
+	move: 'work',
+	grade: 'work',
+	edit: 'work',
+	photo: 'work',
+	prove: 'work',
+	hold: 'hold',
+	free: 'hold',
+	fit: 'hold',
+	sell: 'trade',
+	'take back': 'trade',
+	scrap: 'work',
+	miss: 'work',
+	find: 'work'
+};
 
 export const isMove = (word: string): word is Move => Object.hasOwn(MOVES, word);
 

@@ -1,8 +1,8 @@
 import { kind } from '../trade';
-import { isMove, leads, MOVES, type Arrows, type Move } from './moves';
+import { isMove, leads, MOVES, NEEDS, type Arrows, type Move } from './moves';
 import type { PartState } from './words';
 
-export { isMove, leads, MOVES, type Move };
+export { isMove, leads, MOVES, NEEDS, type Move };
 
 /** What a rule needs to know about a part. */
 export interface PartFacts {

@@ -1,4 +1,5 @@
-// What a part is worth: used price, waiting, gain, the word of the verdict, when to stop cleaning.
+// What a part is worth: used price, waiting, gain, the word of the verdict, when to stop cleaning,
+// what to pull, what to do with a donor, what each part cost, and how the figures are learned.
 // Not for prices or policy as the shop keeps them: plain figures come in, plain figures go out.
 // Imports nothing but itself; amounts in cents, rates per year, minutes.
 export { WorthError } from './worth-error';
@@ -9,3 +10,7 @@ export type { GainInput } from './gain-input';
 export type { Terms } from './values';
 export { verdictWord, type VerdictWord } from './verdict';
 export { keepCleaning, type Cleaning, type CleaningInput } from './cleaning';
+export { learnChance, type ChanceToLearn } from './learn-chance';
+export { learnRate, type RateToLearn } from './learn-rate';
+export { learnShare, type ShareToLearn, type SharesSeen } from './learn-share';
+export type { Learned, MeanPrior } from './learn-input';

@@ -4,7 +4,7 @@ import type { BinView } from '$lib/bins/view';
 import { may } from '$lib/people/role';
 import { Refused } from '$lib/refusal';
 import { inShop, type Context } from '../context';
-import { record } from '../people';
+import { allow, record } from '../people';
 import { mintTag } from '../tags';
 import { getBin } from './queries';
 import { bin } from './tables';
@@ -30,6 +30,7 @@ export function addressColumns(typed: string) {
 
 export const addBin = (ctx: Context, input: BinInput): Promise<BinView> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		needOwnerForCost(ctx, input.yearlyCostCents);
 		const place = addressColumns(input.address);
 		const [row] = await tx

@@ -2,10 +2,10 @@ import type { BinEdit } from '$lib/bins/input';
 import type { BinView } from '$lib/bins/view';
 import { may } from '$lib/people/role';
 import { NotFound, Refused } from '$lib/refusal';
-import { and, eq, isNull, ne, sql } from 'drizzle-orm';
+import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
-import type { Tx } from '../db';
-import { record } from '../people';
+import { alone } from '../db/alone';
+import { allow, record } from '../people';
 import { addressColumns, addressTaken, needOwnerForCost } from './add';
 import { findPlace, getBin, type BinRow } from './queries';
 import { bin } from './tables';
@@ -30,24 +30,10 @@ function bothSaid(row: BinRow, typed: Partial<BinRow>): string {
 		.join('; ');
 }
 
-async function needFree(tx: Tx, ctx: Context, address: string, id: number): Promise<void> {
-	const [other] = await tx
-		.select({ id: bin.id })
-		.from(bin)
-		.where(
-			and(
-				eq(bin.shopId, ctx.shopId),
-				eq(sql`upper(${bin.address})`, address),
-				isNull(bin.retiredAt),
-				ne(bin.id, id)
-			)
-		);
-	if (other) throw addressTaken(address);
-}
-
 export const editBin = (ctx: Context, ref: string, input: BinEdit): Promise<BinView> =>
 	inShop(ctx, async (tx, ctx) => {
-		const row = await findPlace(tx, ctx, ref, { lock: true });
+		allow(ctx, 'work');
+		const row = await findPlace(tx, ctx, ref, 'no key update');
 		if (!row) throw new NotFound();
 		const { version, yearlyCostCents, ...rest } = input;
 		const typed = { ...rest, litres: rest.litres ?? null, ...addressColumns(input.address) };
@@ -57,12 +43,12 @@ export const editBin = (ctx: Context, ref: string, input: BinEdit): Promise<BinV
 				`Somebody saved this bin meanwhile: ${bothSaid(row, typed) || 'the same as you typed'}. Look and save again.`
 			);
 		needOwnerForCost(ctx, yearlyCostCents);
-		await needFree(tx, ctx, typed.address, row.id);
 		const cost = may(ctx.role, 'run') ? { yearlyCostCents: yearlyCostCents ?? null } : {};
-		await tx
+		const saved = tx
 			.update(bin)
 			.set({ ...typed, ...cost, version: version + 1 })
 			.where(and(eq(bin.shopId, ctx.shopId), eq(bin.id, row.id)));
+		await alone(saved, 'bin_address', addressTaken(typed.address));
 		await record(tx, ctx, {
 			about: 'bin',
 			aboutId: row.id,

@@ -56,17 +56,20 @@ export const listBins = (ctx: Context) => listWhere(ctx, false);
 /** The bins that were taken out of use. */
 export const listRetiredBins = (ctx: Context) => listWhere(ctx, true);
 
-/** A bin in use by its address or its tag, however typed; null when there is none. */
+/**
+ * A bin in use by its address or its tag, however typed; null when there is none. Whoever puts something
+ * in shares its lock, so that it is not retired meanwhile.
+ */
 export async function findPlace(
 	tx: Tx,
 	ctx: Context,
 	typed: string,
-	{ lock = false } = {}
+	lock?: 'share' | 'no key update'
 ): Promise<BinRow | null> {
 	const live = and(eq(bin.shopId, ctx.shopId), isNull(bin.retiredAt));
 	const by = async (which: ReturnType<typeof eq>) => {
 		const asked = tx.select().from(bin).where(and(live, which));
-		const [row] = await (lock ? asked.for('update') : asked);
+		const [row] = await (lock ? asked.for(lock) : asked);
 		return row ?? null;
 	};
 	const byAddress = await by(eq(sql`upper(${bin.address})`, readAddress(typed).address));
@@ -82,7 +85,8 @@ export async function redBin(tx: Tx, ctx: Context): Promise<BinRow | null> {
 		.from(bin)
 		.where(and(eq(bin.shopId, ctx.shopId), eq(bin.red, true), isNull(bin.retiredAt)))
 		.orderBy(asc(bin.id))
-		.limit(1);
+		.limit(1)
+		.for('share');
 	return row ?? null;
 }
 

@@ -1,7 +1,8 @@
 import { NotFound, Refused } from '$lib/refusal';
-import { and, eq, isNotNull, isNull, sql } from 'drizzle-orm';
+import { and, eq, isNotNull } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
-import { record } from '../people';
+import { alone } from '../db/alone';
+import { allow, record } from '../people';
 import { addressTaken } from './add';
 import { findPlace, getBin } from './queries';
 import { bin } from './tables';
@@ -9,7 +10,8 @@ import { bin } from './tables';
 /** Takes an empty bin out of use; its address is free again. Returns its tag, to bring it back by. */
 export const retireBin = (ctx: Context, ref: string): Promise<{ tag: string; address: string }> =>
 	inShop(ctx, async (tx, ctx) => {
-		const row = await findPlace(tx, ctx, ref, { lock: true });
+		allow(ctx, 'work');
+		const row = await findPlace(tx, ctx, ref, 'no key update');
 		if (!row) throw new NotFound();
 		const { contents } = await getBin(ctx, row.tag);
 		if (contents.length > 0) {
@@ -34,27 +36,18 @@ export const retireBin = (ctx: Context, ref: string): Promise<{ tag: string; add
 /** Brings a retired bin back into use under its address. */
 export const useBinAgain = (ctx: Context, tag: string): Promise<{ address: string }> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		const [row] = await tx
 			.select()
 			.from(bin)
 			.where(and(eq(bin.shopId, ctx.shopId), eq(bin.tag, tag), isNotNull(bin.retiredAt)))
-			.for('update');
+			.for('no key update');
 		if (!row) throw new NotFound();
-		const [other] = await tx
-			.select({ id: bin.id })
-			.from(bin)
-			.where(
-				and(
-					eq(bin.shopId, ctx.shopId),
-					eq(sql`upper(${bin.address})`, row.address.toUpperCase()),
-					isNull(bin.retiredAt)
-				)
-			);
-		if (other) throw addressTaken(row.address);
-		await tx
+		const back = tx
 			.update(bin)
 			.set({ retiredAt: null, version: row.version + 1 })
 			.where(and(eq(bin.shopId, ctx.shopId), eq(bin.id, row.id)));
+		await alone(back, 'bin_address', addressTaken(row.address));
 		await record(tx, ctx, {
 			about: 'bin',
 			aboutId: row.id,

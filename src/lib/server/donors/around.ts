@@ -4,6 +4,7 @@ import type { Context } from '../context';
 import type { Tx } from '../db';
 import { part } from '../parts/tables';
 import { photo } from '../photos/tables';
+import { noMistake } from './parts-of';
 import type { ReleaseRow } from './rows';
 import { box, donorPhoto, release } from './tables';
 
@@ -39,7 +40,7 @@ const partCounts = (tx: Tx, ctx: Context, ids: number[]) =>
 	tx
 		.select({ donorId: part.donorId, count: sql<number>`count(*)::int` })
 		.from(part)
-		.where(and(eq(part.shopId, ctx.shopId), inArray(part.donorId, ids)))
+		.where(and(eq(part.shopId, ctx.shopId), inArray(part.donorId, ids), noMistake))
 		.groupBy(part.donorId);
 
 /** What belongs to these donors, in four queries for any number of them. */

@@ -1,6 +1,6 @@
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
-import { record } from '../people';
+import { allow, record } from '../people';
 import { mintTag } from '../tags';
 import { donorRow } from './rows';
 import { box } from './tables';
@@ -14,6 +14,7 @@ export async function addBoxRow(tx: Tx, ctx: Context, donorId: number): Promise<
 /** One more box for a donor, when one does not hold it all. */
 export const addBox = (ctx: Context, ref: string): Promise<{ tag: string }> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		const row = await donorRow(tx, ctx, ref, { lock: true });
 		const { tag } = await addBoxRow(tx, ctx, row.id);
 		await record(tx, ctx, {

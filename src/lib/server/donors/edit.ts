@@ -4,7 +4,9 @@ import { Refused } from '$lib/refusal';
 import { SAFE_TICKS } from '$lib/trade';
 import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
-import { record } from '../people';
+import type { Tx } from '../db';
+import { allow, record } from '../people';
+import { enqueue } from '../queue/enqueue';
 import { donorColumns } from './columns';
 import { donorRow, type DonorRow } from './rows';
 import { donor } from './tables';
@@ -47,6 +49,16 @@ function needVersion(row: DonorRow, version: number | undefined, typed: Partial<
 	);
 }
 
+/** What the parts of a donor are found and judged by. */
+const TOLD = ['maker', 'model', 'typeCode', 'engineClass', 'cause', 'secondCause'] as const;
+
+async function tellParts(tx: Tx, ctx: Context, row: DonorRow, typed: Partial<DonorRow>) {
+	if (!TOLD.some((field) => field in typed && plain(row[field]) !== plain(typed[field]))) return;
+	const { shopId, memberId } = ctx;
+	const job = { shopId, memberId, donorId: row.id };
+	await enqueue(tx, 'donors.changed', job, `donors.changed ${shopId} ${row.id}`);
+}
+
 const save = (
 	ctx: Context,
 	ref: string,
@@ -55,6 +67,7 @@ const save = (
 	what: string
 ) =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		const row = await donorRow(tx, ctx, ref, { lock: true });
 		const typed = columns(row);
 		needVersion(row, version, typed);
@@ -62,6 +75,7 @@ const save = (
 			.update(donor)
 			.set({ ...typed, version: row.version + 1 })
 			.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, row.id)));
+		await tellParts(tx, ctx, row, typed);
 		const { paidCents: _, ...detail } = typed;
 		await record(tx, ctx, { about: 'donor', aboutId: row.id, what, detail });
 	});

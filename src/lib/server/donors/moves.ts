@@ -6,7 +6,7 @@ import { Refused } from '$lib/refusal';
 import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
-import { record } from '../people';
+import { allow, record } from '../people';
 import { donorRow, newestRelease, todayIn, type DonorRow } from './rows';
 import { donor } from './tables';
 
@@ -36,6 +36,7 @@ const stamped = (to: DonorState, now: Date) =>
 
 const move = (ctx: Context, ref: string, how: DonorMove, { reason }: MoveInput): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		const row = await donorRow(tx, ctx, ref, { lock: true });
 		const to = afterMove(row.state, how);
 		if (!to) throw new Refused('gate', noMoveSaid(row.state, how));

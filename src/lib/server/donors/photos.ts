@@ -3,7 +3,7 @@ import { NotFound } from '$lib/refusal';
 import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
-import { record } from '../people';
+import { allow, record } from '../people';
 import { addPhotoRow, deletePhoto, keepPhoto, restorePhoto, type KeptPhoto } from '../photos';
 import { donorRow } from './rows';
 import { donorPhoto } from './tables';
@@ -34,9 +34,10 @@ export const addKeptPhoto = (
 	kept: KeptPhoto,
 	shot: DonorShot
 ): Promise<{ id: number }> =>
-	inShop(ctx, async (tx, ctx) =>
-		attachPhoto(tx, ctx, (await donorRow(tx, ctx, ref)).id, kept, shot)
-	);
+	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
+		return attachPhoto(tx, ctx, (await donorRow(tx, ctx, ref)).id, kept, shot);
+	});
 
 export async function addDonorPhoto(
 	ctx: Context,
@@ -44,6 +45,7 @@ export async function addDonorPhoto(
 	bytes: Buffer,
 	shot: DonorShot
 ): Promise<{ id: number }> {
+	allow(ctx, 'work');
 	await inShop(ctx, (tx, ctx) => donorRow(tx, ctx, ref));
 	return addKeptPhoto(ctx, ref, await keepPhoto(ctx, bytes), shot);
 }
@@ -55,6 +57,7 @@ const ofDonor = (
 	what: (ctx: Context, id: number) => Promise<void>
 ) =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		const { id: donorId } = await donorRow(tx, ctx, ref);
 		const [row] = await tx
 			.select({ photoId: donorPhoto.photoId })

@@ -5,7 +5,7 @@ import { Refused } from '$lib/refusal';
 import { and, eq, sql } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
-import { record } from '../people';
+import { allow, record } from '../people';
 import { donorRow, todayIn, type DonorRow } from './rows';
 import { donor, release } from './tables';
 
@@ -45,6 +45,7 @@ export async function addRelease(
 
 export const releaseDonor = (ctx: Context, ref: string, input: ReleaseInput): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		const row = await donorRow(tx, ctx, ref, { lock: true });
 		await addRelease(tx, ctx, row, input);
 		await tx

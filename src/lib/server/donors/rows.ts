@@ -36,7 +36,7 @@ export async function donorRow(
 			.select()
 			.from(donor)
 			.where(and(eq(donor.shopId, ctx.shopId), which));
-		const [row] = await (lock ? asked.for('update') : asked);
+		const [row] = await (lock ? asked.for('no key update') : asked);
 		return row;
 	};
 	const number = donorNumber(ref);

@@ -4,7 +4,7 @@ import { Refused } from '$lib/refusal';
 import { eq, sql } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
-import { record } from '../people';
+import { allow, record } from '../people';
 import { shop } from '../people/tables';
 import type { KeptPhoto } from '../photos';
 import { addBoxRow } from './boxes';
@@ -50,6 +50,7 @@ async function addRow(tx: Tx, ctx: Context, input: Omit<TakeIn, 'release'>) {
  */
 export const takeIn = (ctx: Context, input: TakeIn, plates: KeptPhoto[] = []): Promise<TakenIn> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		if (!input.model && plates.length === 0)
 			throw new Refused('bad input', 'Enter the model, or add a photo of the plate.', 'model');
 		const { release, ...known }: TakeIn & { release?: ReleaseInput } = input;

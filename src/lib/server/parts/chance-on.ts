@@ -1,5 +1,6 @@
 import { whyNotStock } from '$lib/parts/keeping';
 import { causeSaid, chanceGood, isCauseId, type ChanceGood } from '$lib/trade';
+import type { Policy } from '$lib/people/policy';
 import type { Context } from '../context';
 import type { donor } from '../donors/tables';
 import { getPolicy } from '../people';
@@ -12,12 +13,15 @@ const causeOf = (id: string | null | undefined) => (id && isCauseId(id) ? id : n
  * The chance that a kind is good before any test, by what killed its donor (null: old stock) and the shop's
  * own figures; `never` says why it cannot become stock.
  */
-export async function chanceOn(
-	ctx: Context,
+export const chanceOn = async (ctx: Context, kindId: string, donor: Dead | null) =>
+	chanceBy(await getPolicy(ctx), kindId, donor);
+
+/** The same for many kinds under a policy that was read once. */
+export function chanceBy(
+	{ chances, proofOdds }: Pick<Policy, 'chances' | 'proofOdds'>,
 	kindId: string,
 	donor: Dead | null
-): Promise<ChanceGood & { never: string | null }> {
-	const { chances, proofOdds } = await getPolicy(ctx);
+): ChanceGood & { never: string | null } {
 	const cause = causeOf(donor?.cause);
 	const secondCause = causeOf(donor?.secondCause);
 	const sureness = donor?.sureness ?? null;

@@ -18,7 +18,7 @@ export const followDonor = (ctx: Context, donorId: number): Promise<void> =>
 			.from(part)
 			.where(and(eq(part.shopId, ctx.shopId), eq(part.donorId, donorId)))
 			.orderBy(part.id)
-			.for('update');
+			.for('no key update');
 		for (const row of rows) {
 			const searchText = await wordsOf(tx, ctx, row);
 			await tx.update(part).set({ searchText, engineKey: from.engineKey }).where(own(ctx, row.id));

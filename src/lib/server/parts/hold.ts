@@ -2,7 +2,7 @@ import type { Hold } from '$lib/parts/input';
 import { Refused } from '$lib/refusal';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
-import { getShop } from '../people';
+import { allow, getShop } from '../people';
 import { endOfDay } from './day';
 import { restingState } from './missing';
 import { changePart, partFor, partRow, type Done, type PartRow } from './row';
@@ -12,6 +12,7 @@ const WEEK_MS = 7 * 24 * 3600 * 1000;
 /** Keeps a part for somebody until a date, a week when none is said. Of many who ask at once one gets it. */
 export const holdPart = (ctx: Context, tag: string, input: Hold): Promise<Done & { until: Date }> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'hold');
 		await freeIfExpired(tx, ctx, await partRow(tx, ctx, tag, 'lock'));
 		const row = await partFor(tx, ctx, tag, 'hold');
 		const until = await holdUntil(ctx, input.until);

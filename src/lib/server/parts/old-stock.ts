@@ -1,5 +1,6 @@
 import type { OldStock } from '$lib/parts/input';
 import { inShop, type Context } from '../context';
+import { allow } from '../people';
 import type { KeptPhoto } from '../photos';
 import { logPart, type Logged } from './log-part';
 
@@ -9,4 +10,7 @@ export const logOldStock = (
 	{ engine, ...input }: OldStock,
 	kept: readonly KeptPhoto[] = []
 ): Promise<Logged> =>
-	inShop(ctx, (tx, ctx) => logPart(tx, ctx, input, { donor: null, engine: engine ?? '', kept }));
+	inShop(ctx, (tx, ctx) => {
+		allow(ctx, 'work');
+		return logPart(tx, ctx, input, { donor: null, engine: engine ?? '', kept });
+	});

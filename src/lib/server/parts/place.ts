@@ -36,7 +36,7 @@ async function boxPlace(tx: Tx, ctx: Context, typed: string): Promise<Place | nu
 
 /** The place that an address, a bin's tag or a box's tag names. */
 export async function placeNamed(tx: Tx, ctx: Context, typed: string): Promise<Place> {
-	const row = await findPlace(tx, ctx, typed);
+	const row = await findPlace(tx, ctx, typed, 'share');
 	if (row) return inBin(row);
 	const place = await boxPlace(tx, ctx, typed);
 	if (place) return place;

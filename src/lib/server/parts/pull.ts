@@ -1,6 +1,7 @@
 import type { Pull } from '$lib/parts/input';
 import { inShop, type Context } from '../context';
 import { pullableDonor } from '../donors';
+import { allow } from '../people';
 import type { KeptPhoto } from '../photos';
 import { logPart, type Logged } from './log-part';
 
@@ -12,6 +13,7 @@ export const pullPart = (
 	kept: readonly KeptPhoto[] = []
 ): Promise<Logged> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		const donor = await pullableDonor(tx, ctx, donorRef);
 		return logPart(tx, ctx, input, { donor, engine: '', kept });
 	});

@@ -1,11 +1,11 @@
 import { readTag } from '$lib/codes';
-import { isMove, leads, whyNot, type Move, type PartFacts } from '$lib/parts/state';
+import { isMove, leads, NEEDS, whyNot, type Move, type PartFacts } from '$lib/parts/state';
 import type { PartState } from '$lib/parts/words';
 import { NotFound, Refused } from '$lib/refusal';
 import { and, eq } from 'drizzle-orm';
 import type { Context } from '../context';
 import type { Tx } from '../db';
-import { record } from '../people';
+import { allow, record } from '../people';
 import { isDoubtful } from './doubt';
 import { part } from './tables';
 import { takenWords } from './taken';
@@ -34,7 +34,7 @@ export async function partRow(
 		.select()
 		.from(part)
 		.where(and(eq(part.shopId, ctx.shopId), eq(part.tag, reading.tag)));
-	const [row] = await (lock === 'lock' ? query.for('update') : query);
+	const [row] = await (lock === 'lock' ? query.for('no key update') : query);
 	if (!row) throw new NotFound();
 	return row;
 }
@@ -43,8 +43,9 @@ export async function factsOf(tx: Tx, ctx: Context, row: PartRow): Promise<PartF
 	return { state: row.state, kind: row.kind, doubtful: await isDoubtful(tx, ctx, row.id) };
 }
 
-/** Locks the part and asks the rules; a shut move is refused with by whom and since when, or what opens it. */
+/** Asks whether the member may, locks the part and asks the rules; a shut move is refused with by whom and since when, or what opens it. */
 export async function partFor(tx: Tx, ctx: Context, tag: string, move: Move): Promise<PartRow> {
+	allow(ctx, NEEDS[move]);
 	const row = await partRow(tx, ctx, tag, 'lock');
 	const no = whyNot(move, await factsOf(tx, ctx, row));
 	if (!no) return row;

@@ -2,7 +2,8 @@ import type { KindStillOn } from '$lib/parts/view';
 import { kindsOn, minutesToPull, type EngineClass, type Fitting, type Kind } from '$lib/trade';
 import { inShop, type Context } from '../context';
 import { donorRow } from '../donors';
-import { chanceOn } from './chance-on';
+import { getPolicy } from '../people';
+import { chanceBy } from './chance-on';
 import { loggedKinds } from './off-donor';
 import { kindVerdicts } from './verdicts';
 
@@ -26,9 +27,10 @@ export const kindsStillOn = (ctx: Context, donorRef: string): Promise<KindStillO
 		);
 		const ids = there.map(({ id }) => id);
 		const verdicts = await kindVerdicts(ctx, donor.id, ids);
+		const policy = await getPolicy(ctx);
 		const rows: KindStillOn[] = [];
 		for (const { id, name, system } of there) {
-			const { chance, level, never } = await chanceOn(ctx, id, donor);
+			const { chance, level, never } = chanceBy(policy, id, donor);
 			const verdict = verdicts.get(id);
 			rows.push({
 				kind: id,

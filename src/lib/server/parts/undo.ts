@@ -1,10 +1,11 @@
 import { happened, mayUndo, UNDO_DAYS } from '$lib/parts/history';
-import { MISTAKE, undone } from '$lib/parts/state';
+import { isMove, MISTAKE, NEEDS, undone } from '$lib/parts/state';
 import type { PartState } from '$lib/parts/words';
 import { NotFound, Refused } from '$lib/refusal';
 import { and, desc, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
+import { allow } from '../people';
 import { event } from '../people/tables';
 import { changePart, own, type Done, type PartRow } from './row';
 import { part } from './tables';
@@ -14,8 +15,9 @@ type Event = typeof event.$inferSelect;
 /** Takes back the newest change of a part; it is an event itself, nothing is wiped out. */
 export const undoPart = (ctx: Context, eventId: number): Promise<Done> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		const about = await partEvent(tx, ctx, eq(event.id, eventId));
-		const [row] = await tx.select().from(part).where(own(ctx, about.aboutId)).for('update');
+		const [row] = await tx.select().from(part).where(own(ctx, about.aboutId)).for('no key update');
 		if (!row) throw new NotFound();
 		const newest = await partEvent(tx, ctx, eq(event.aboutId, row.id));
 		if (newest.id !== eventId)
@@ -25,6 +27,7 @@ export const undoPart = (ctx: Context, eventId: number): Promise<Done> =>
 			);
 		if (!mayUndo(newest.what))
 			throw new Refused('gate', `${happened(newest)}: this stays in the history.`);
+		if (isMove(newest.what)) allow(ctx, NEEDS[newest.what]);
 		if (ctx.now.getTime() - newest.at.getTime() > UNDO_DAYS * 24 * 3600 * 1000)
 			throw new Refused('gate', `This was more than ${UNDO_DAYS} days ago. Change it by hand.`);
 		const detail = { undone: newest.id, said: happened(newest) };

@@ -1,6 +1,6 @@
 import type { InviteInput } from '$lib/people/input';
 import { NotFound, Refused } from '$lib/refusal';
-import { and, eq, isNull } from 'drizzle-orm';
+import { and, eq, gt, isNull } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import { allow } from './allow';
 import { enqueue } from '../queue/enqueue';
@@ -9,11 +9,17 @@ import { record } from './record';
 import { invite, member, person, shop } from './tables';
 
 const DAYS_OPEN = 7;
+/** A shop invites its people, it does not mail the world. */
+const A_DAY = 20;
 
 /** Invites an address; the letter leaves only if the row does. */
 export const inviteMember = (ctx: Context, input: InviteInput): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
 		allow(ctx, 'run');
+		const dayAgo = new Date(ctx.now.getTime() - 86_400_000);
+		const today = and(eq(invite.shopId, ctx.shopId), gt(invite.sentAt, dayAgo));
+		if ((await tx.$count(invite, today)) >= A_DAY)
+			throw new Refused('too many', `${A_DAY} invitations a day. Send the next one tomorrow.`);
 		const [already] = await tx
 			.select({ name: member.name })
 			.from(member)

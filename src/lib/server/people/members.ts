@@ -11,6 +11,7 @@ import { apiKey, invite, member, person } from './tables';
 /** Everybody in the shop, keys last. */
 export const listMembers = (ctx: Context): Promise<MemberRow[]> =>
 	inShop(ctx, async (tx) => {
+		allow(ctx, 'run');
 		const rows = await tx
 			.select({
 				id: member.id,
@@ -34,8 +35,9 @@ export const listMembers = (ctx: Context): Promise<MemberRow[]> =>
 	});
 
 export const listInvites = (ctx: Context): Promise<OpenInvite[]> =>
-	inShop(ctx, (tx) =>
-		tx
+	inShop(ctx, async (tx) => {
+		allow(ctx, 'run');
+		return tx
 			.select({
 				id: invite.id,
 				email: invite.email,
@@ -46,15 +48,16 @@ export const listInvites = (ctx: Context): Promise<OpenInvite[]> =>
 			.where(
 				and(eq(invite.shopId, ctx.shopId), isNull(invite.acceptedAt), isNull(invite.withdrawnAt))
 			)
-			.orderBy(asc(invite.id))
-	);
+			.orderBy(asc(invite.id));
+	});
 
 async function otherOwners(tx: Tx, ctx: Context, but: number): Promise<number> {
 	const rows = await tx
 		.select({ id: member.id })
 		.from(member)
 		.where(and(eq(member.shopId, ctx.shopId), eq(member.role, 'owner'), isNull(member.disabledAt)))
-		.for('update');
+		.orderBy(asc(member.id))
+		.for('no key update');
 	return rows.filter((row) => row.id !== but).length;
 }
 
@@ -64,7 +67,7 @@ export const editMember = (ctx: Context, input: MemberEdit): Promise<void> =>
 		allow(ctx, 'run');
 		const others = await otherOwners(tx, ctx, input.memberId);
 		const mine = and(eq(member.shopId, ctx.shopId), eq(member.id, input.memberId));
-		const [row] = await tx.select().from(member).where(mine).for('update');
+		const [row] = await tx.select().from(member).where(mine).for('no key update');
 		if (!row) throw new NotFound();
 		if (row.version !== input.version)
 			throw new Refused(

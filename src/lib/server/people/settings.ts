@@ -20,7 +20,7 @@ export const getShop = (ctx: Context): Promise<ShopSettings> =>
 export const editShop = (ctx: Context, input: ShopEdit): Promise<ShopSettings> =>
 	inShop(ctx, async (tx, ctx) => {
 		allow(ctx, 'run');
-		const [now] = await tx.select().from(shop).where(eq(shop.id, ctx.shopId)).for('update');
+		const [now] = await tx.select().from(shop).where(eq(shop.id, ctx.shopId)).for('no key update');
 		if (!now) throw new NotFound();
 		if (now.version !== input.version)
 			throw new Refused(
@@ -39,7 +39,7 @@ export const editShop = (ctx: Context, input: ShopEdit): Promise<ShopSettings> =
 export const setSeason = (ctx: Context, season: Season): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
 		allow(ctx, 'run');
-		const [row] = await tx.select().from(shop).where(eq(shop.id, ctx.shopId)).for('update');
+		const [row] = await tx.select().from(shop).where(eq(shop.id, ctx.shopId)).for('no key update');
 		if (!row) throw new NotFound();
 		await tx
 			.update(shop)
@@ -73,7 +73,7 @@ export const editPolicy = (
 	inShop(ctx, async (tx, ctx) => {
 		allow(ctx, 'run');
 		const checked = withDefaults(input.own);
-		await tx.select().from(shop).where(eq(shop.id, ctx.shopId)).for('update');
+		await tx.select().from(shop).where(eq(shop.id, ctx.shopId)).for('no key update');
 		const { version, own: before } = await getPolicyRow(ctx);
 		if (version !== input.version)
 			throw new Refused(

@@ -20,7 +20,11 @@ const waitAfter = (failures: number) =>
 async function countTry(db: Db, email: string, now: Date) {
 	return db.transaction(async (tx) => {
 		await tx.insert(signInTry).values({ email, failures: 0, waitUntil: now }).onConflictDoNothing();
-		const [row] = await tx.select().from(signInTry).where(eq(signInTry.email, email)).for('update');
+		const [row] = await tx
+			.select()
+			.from(signInTry)
+			.where(eq(signInTry.email, email))
+			.for('no key update');
 		const stopped = row!.failures >= HARD_STOP;
 		const left = stopped ? LONGEST_WAIT_SECONDS : (row!.waitUntil.getTime() - now.getTime()) / 1000;
 		if (left > 0) return Math.ceil(left);

@@ -1,11 +1,12 @@
 import { NotFound } from '$lib/refusal';
 import { and, eq, isNotNull, isNull } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
-import { record } from '../people';
+import { allow, record } from '../people';
 import { photo } from './tables';
 
 const setDeleted = (ctx: Context, id: number, deleted: boolean): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		const [row] = await tx
 			.update(photo)
 			.set({ deletedAt: deleted ? ctx.now : null })

@@ -1,6 +1,7 @@
 import { PHOTO_SIZES } from '$lib/photos/links';
 import { randomUUID } from 'node:crypto';
 import { inShop, type Context } from '../context';
+import { allow } from '../people';
 import { putKey } from '../storage';
 import { cleanPhoto } from './clean';
 import { photo } from './tables';
@@ -18,6 +19,7 @@ export const shopPrefix = (shopId: number) => `${shopId}/`;
 
 /** Cleans the upload and puts its sizes into the store: before any transaction, the row comes after. */
 export async function keepPhoto(ctx: Context, upload: Buffer): Promise<KeptPhoto> {
+	allow(ctx, 'work');
 	if (ctx.tx) throw new Error('A photo goes to the store before the transaction, never inside it');
 	const { width, height, sizes } = await cleanPhoto(upload);
 	const key = `${shopPrefix(ctx.shopId)}${randomUUID()}`;
@@ -31,6 +33,7 @@ export async function keepPhoto(ctx: Context, upload: Buffer): Promise<KeptPhoto
 /** The row of a picture that is in the store. */
 export const addPhotoRow = (ctx: Context, kept: KeptPhoto): Promise<{ id: number }> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
 		const [row] = await tx
 			.insert(photo)
 			.values({ shopId: ctx.shopId, takenAt: ctx.now, ...kept })

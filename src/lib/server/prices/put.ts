@@ -7,7 +7,7 @@ import { Refused } from '$lib/refusal';
 import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
-import { getShop, record } from '../people';
+import { allow, getShop, record } from '../people';
 import { getPrice } from './queries';
 import { price } from './tables';
 
@@ -79,6 +79,7 @@ export const sameAs = (ctx: Context, values: Values) =>
 /** Puts a price on the list; the one for the same kind, engine and number is written over. */
 export const putPrice = (ctx: Context, input: PriceInput): Promise<PriceView> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'trade');
 		const values = rowOf(ctx, input);
 		const [added] = await tx
 			.insert(price)
@@ -90,7 +91,7 @@ export const putPrice = (ctx: Context, input: PriceInput): Promise<PriceView> =>
 			await record(tx, ctx, { about: 'price', aboutId: added.id, what: 'added', detail });
 			return getPrice(ctx, added.id);
 		}
-		const [before] = await tx.select().from(price).where(sameAs(ctx, values)).for('update');
+		const [before] = await tx.select().from(price).where(sameAs(ctx, values)).for('no key update');
 		if (!before)
 			throw new Refused('changed', 'This price was taken off the list just now. Save again.');
 		await refuseChanged(ctx, before, values, input.version);

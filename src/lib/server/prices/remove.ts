@@ -3,7 +3,7 @@ import { NotFound, Refused } from '$lib/refusal';
 import { findKind } from '$lib/trade';
 import { and, desc, eq, gte, isNull, sql } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
-import { record } from '../people';
+import { allow, record } from '../people';
 import { event, member } from '../people/tables';
 import { getPrice } from './queries';
 import { price } from './tables';
@@ -16,6 +16,7 @@ const KEPT_DAYS = 30;
 /** Takes a price off the list. Gives the event it can be put back by. */
 export const removePrice = (ctx: Context, id: number, version: number): Promise<number> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'trade');
 		const mine = and(eq(price.shopId, ctx.shopId), eq(price.id, id));
 		const [before] = await tx.select().from(price).where(mine).for('update');
 		if (!before) throw new NotFound('This price is not on the list any more');
@@ -76,6 +77,7 @@ export const listRemoved = (ctx: Context): Promise<RemovedPrice[]> =>
 /** Puts a removed price back as it was; refused where another stands for the same thing by now. */
 export const putBackPrice = (ctx: Context, eventId: number): Promise<PriceView> =>
 	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'trade');
 		const [gone] = await tx
 			.select()
 			.from(event)
