@@ -2,12 +2,13 @@ import { building } from '$app/environment';
 import { NotFound } from '$lib/refusal';
 import { closeDb } from '$lib/server/db';
 import { env } from '$lib/server/env';
+import { FAULT_SAID } from '$lib/server/http/fault';
 import { BARE_POLICY, headers } from '$lib/server/http/headers';
 import { notHere } from '$lib/server/http/not-here';
 import { fromElsewhere } from '$lib/server/http/origin';
 import { tasks } from '$lib/server/jobs';
-import { log } from '$lib/server/log';
-import { authHandle, identify } from '$lib/server/people';
+import { logFault } from '$lib/server/log';
+import { authHandle, identify, jsonFault } from '$lib/server/people';
 import { startQueue, stopQueue } from '$lib/server/queue';
 import {
 	json,
@@ -42,18 +43,34 @@ const identified: Handle = async ({ event, resolve }) => {
 	return resolve(event);
 };
 
+const isApi = (event: RequestEvent) => event.url.pathname.startsWith('/api/');
+
+const noSuchData = () =>
+	json({ code: 'not found', message: new NotFound().message }, { status: 404 });
+
+/** Whatever breaks before a door of the outside edge is answered as data too. */
+const asData: Handle = async ({ event, resolve }) => {
+	try {
+		return await resolve(event);
+	} catch (thrown) {
+		if (isApi(event)) return jsonFault(thrown, event);
+		throw thrown;
+	}
+};
+
 /** A shop's address opens to its members; to others it is as if it were not there. */
 const guard: Handle = async ({ event, resolve }) => {
 	const { ctx, person } = event.locals;
+	const api = isApi(event);
+	if (api && !event.route.id) return noSuchData();
 	if (!event.params.shop || ctx) return resolve(event);
-	const api = event.url.pathname.startsWith('/api/');
 	const signedOut = !person;
 	if (api && signedOut)
 		return json(
 			{ code: 'not signed in', message: 'Sign in, or send a key of this shop.' },
 			{ status: 401 }
 		);
-	if (api) return json({ code: 'not found', message: new NotFound().message }, { status: 404 });
+	if (api) return noSuchData();
 	if (signedOut)
 		redirect(303, `/sign-in?to=${encodeURIComponent(event.url.pathname + event.url.search)}`);
 	return notHere();
@@ -81,16 +98,10 @@ const theme = (event: RequestEvent) => {
 	return chosen && THEMES.includes(chosen) ? ` data-theme="${chosen}"` : '';
 };
 
-export const handle = sequence(secure, ownPages, authHandle, identified, guard);
+export const handle = sequence(secure, asData, ownPages, authHandle, identified, guard);
 
 export const handleError: HandleServerError = ({ error, event, status, message }) => {
 	if (status === 404) return { message: 'This page is not here. Look at the address, or go back.' };
-	const id = crypto.randomUUID();
-	log().error({
-		id,
-		status,
-		path: event.url.pathname,
-		fault: error instanceof Error ? error.stack : message
-	});
-	return { message: 'Something went wrong on our side. Nothing you saved is lost; try again.', id };
+	const id = logFault(error, { status, route: event.route.id, said: message });
+	return { message: FAULT_SAID, id };
 };

@@ -1,12 +1,6 @@
 /** Why a verb said no. The HTTP edge turns each into a status; the words are shown to people as they stand. */
 export type RefusalCode =
-	| 'bad input'
-	| 'role'
-	| 'taken'
-	| 'changed'
-	| 'gate'
-	| 'key reused'
-	| 'too many';
+	'bad input' | 'role' | 'taken' | 'changed' | 'gate' | 'key reused' | 'too many';
 
 /** An expected refusal: what was asked for cannot be done, and the message says what to do instead. */
 export class Refused extends Error {

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { date, dateTime, length, mass, money, percent, plural } from './index';
+import { date, dateTime, length, mass, money, percent, plural, shortMoney } from './index';
 
 // thin and fixed spaces differ between versions of the locale data
 const plain = (text: string) => text.replace(/\s/g, ' ');
@@ -22,6 +22,18 @@ describe('money', () => {
 	it('shows what is below nil and nil itself', () => {
 		expect(money(-120, 'USD')).toBe('-$1.20');
 		expect(money(0, 'USD')).toBe('$0.00');
+	});
+});
+
+describe('money where room is short', () => {
+	it.each([
+		['en-US', 'USD', 4600, '$46'],
+		['en-US', 'USD', 4650, '$46.50'],
+		['en-US', 'USD', -4600, '-$46'],
+		['de-DE', 'EUR', 123400, '1.234 €'],
+		['en-US', 'JPY', 1234, '¥1,234']
+	])('in %s with %s, %d', (locale, currency, cents, said) => {
+		expect(plain(shortMoney(cents, currency, locale))).toBe(said);
 	});
 });
 

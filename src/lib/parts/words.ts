@@ -10,7 +10,15 @@ export const GRADE_SAID: Record<Grade, string> = {
 	core: 'for rebuilding only'
 };
 
-export const PART_STATES = ['pulled', 'shelved', 'held', 'out', 'back', 'scrapped', 'missing'] as const;
+export const PART_STATES = [
+	'pulled',
+	'shelved',
+	'held',
+	'out',
+	'back',
+	'scrapped',
+	'missing'
+] as const;
 export type PartState = (typeof PART_STATES)[number];
 
 /** How a part was checked. */

@@ -1,10 +1,11 @@
 import { storeAnswers } from '$lib/server/storage';
 import { sql } from 'drizzle-orm';
 
-const answers = (work: Promise<unknown>) => work.then(
-	() => 'ok',
-	() => 'no answer'
-);
+const answers = (work: Promise<unknown>) =>
+	work.then(
+		() => 'ok',
+		() => 'no answer'
+	);
 
 /** Open to everybody: what the product stands on answers, or which part does not. */
 export const GET = async ({ locals }) => {

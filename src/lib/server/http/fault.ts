@@ -1,3 +1,4 @@
+import { DrizzleQueryError } from 'drizzle-orm';
 import { NotFound, Refused, type RefusalCode } from '$lib/refusal';
 import { z } from 'zod';
 
@@ -36,6 +37,16 @@ function sentence(issue: z.core.$ZodIssue): string {
 		: 'Send the fields as JSON';
 }
 
+export const FAULT_SAID =
+	'Something went wrong on our side. Nothing you saved is lost; try again.';
+
+/** Figures, days and characters that no column holds: what checked them let something through. */
+const BEYOND = ['22003', '22007', '22008', '22021', '22P02', '22P05'];
+
+const isBeyond = (thrown: unknown) =>
+	thrown instanceof DrizzleQueryError &&
+	BEYOND.includes(`${(thrown.cause as { code?: string } | undefined)?.code}`);
+
 /** The three fates of an error: known refusals and bad input become words, the rest is thrown on. */
 export function faultOf(thrown: unknown): Fault {
 	if (thrown instanceof Refused)
@@ -54,6 +65,17 @@ export function faultOf(thrown: unknown): Fault {
 				field: issue.path.join('.'),
 				message: capital(sentence(issue))
 			}))
+		};
+	if (isBeyond(thrown))
+		return {
+			status: 400,
+			code: 'bad input',
+			problems: [
+				{
+					field: '',
+					message: 'A figure, day or character in this cannot be kept. Look at each and send it again.'
+				}
+			]
 		};
 	throw thrown;
 }

@@ -1,3 +1,5 @@
+import { Refused } from '$lib/refusal';
+
 type Typed = Record<string, FormDataEntryValue | FormDataEntryValue[]>;
 
 const isNothing = (value: FormDataEntryValue) =>
@@ -25,4 +27,21 @@ export function typedText(typed: Typed): Record<string, string | string[]> {
 		else if (Array.isArray(value)) text[name] = value.filter((one) => typeof one === 'string');
 	}
 	return text;
+}
+
+const tooLong = (fault: unknown) =>
+	fault instanceof Error && 'status' in fault && fault.status === 413;
+
+/** A body that was cut off because it is too long, or is not what it says, is the sender's to mend. */
+export function bodyRefused(fault: unknown, otherwise: string): Refused {
+	const said = 'This is more than can be sent at once. Send fewer or smaller photos.';
+	return new Refused('bad input', tooLong(fault) ? said : otherwise);
+}
+
+export async function readForm(request: Request): Promise<FormData> {
+	try {
+		return await request.formData();
+	} catch (fault) {
+		throw bodyRefused(fault, 'Send the fields as a form.');
+	}
 }

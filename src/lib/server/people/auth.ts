@@ -4,7 +4,7 @@ import Credentials from '@auth/sveltekit/providers/credentials';
 import Nodemailer from '@auth/sveltekit/providers/nodemailer';
 import { db } from '../db';
 import { env, overTls } from '../env';
-import { log } from '../log';
+import { faultSaid, log } from '../log';
 import { sendSignInLetter } from './letters/sign-in';
 import { clearTries, signInByPassword } from './sign-in';
 import { account, person, session, verificationToken } from './tables';
@@ -93,7 +93,7 @@ function config(): SvelteKitAuthConfig {
 		},
 		logger: {
 			error: (fault) => {
-				if (!(fault instanceof CredentialsSignin)) log().warn({ fault: fault.message }, 'sign-in');
+				if (!(fault instanceof CredentialsSignin)) log().warn(faultSaid(fault), 'sign-in');
 			},
 			warn: () => undefined,
 			debug: () => undefined

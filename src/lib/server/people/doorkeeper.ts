@@ -4,7 +4,7 @@ import { error, fail, redirect, type ActionFailure, type RequestEvent } from '@s
 import type { z } from 'zod';
 import type { Context } from '../context';
 import { faultOf } from '../http/fault';
-import { formObject, typedText } from '../http/form';
+import { formObject, readForm, typedText } from '../http/form';
 import { allow } from './allow';
 import { fingerprint, once } from './once';
 
@@ -51,28 +51,47 @@ type Kept<R> = R extends { to: string } ? never : R;
 const goesOn = (done: unknown): done is { to: string } =>
 	typeof done === 'object' && done !== null && 'to' in done && typeof done.to === 'string';
 
-/** A form's action: parse, do once, redirect; a refusal comes back with what was typed. */
+/** The key of a form, and the fingerprint of what it carries; the bytes of its files are said by the caller. */
+export function formKey(event: Event, form: FormData, files: string[] = []) {
+	const typed = formObject(form);
+	const key = typed.idempotencyKey;
+	if (typeof key !== 'string' || key.length > 200)
+		throw new Refused('bad input', 'Reload the page and send the form again.');
+	const where = event.url.pathname + event.url.search;
+	return { key, hash: fingerprint(where, [typedText(typed), files]) };
+}
+
+/** Answers a form: read it, do what it asks, redirect; a refusal comes back with what was typed. */
+export async function answerForm<R>(
+	{ request }: Event,
+	work: (form: FormData, fields: ReturnType<typeof formObject>) => Promise<R>
+): Promise<ActionFailure<Failed> | Kept<R>> {
+	let fields: ReturnType<typeof formObject> = {};
+	let done: R;
+	try {
+		const form = await readForm(request);
+		const { idempotencyKey: _, ...typed } = formObject(form);
+		fields = typed;
+		done = await work(form, fields);
+	} catch (thrown) {
+		const { status, problems } = knownFault(thrown);
+		return fail(status, { problems, typed: typedText(fields) });
+	}
+	if (goesOn(done)) redirect(303, done.to);
+	return done as Kept<R>;
+}
+
+/** A form's action, done once per key. */
 export function action<S extends z.ZodType, R, E extends Event>(
 	ability: Ability,
 	schema: S,
 	verb: (ctx: Context, input: z.output<S>, event: E) => Promise<R>
 ) {
-	return async (event: E): Promise<ActionFailure<Failed> | Kept<R>> => {
-		const typed = formObject(await event.request.formData());
-		const { idempotencyKey, ...fields } = typed;
-		let done: R;
-		try {
+	return (event: E) =>
+		answerForm(event, async (form, fields) => {
 			const ctx = contextFor(event, ability);
-			if (typeof idempotencyKey !== 'string')
-				throw new Refused('bad input', 'Reload the page and send the form again.');
+			const { key, hash } = formKey(event, form);
 			const input = schema.parse(fields);
-			const hash = fingerprint(event.url.pathname + event.url.search, typedText(typed));
-			done = await once(ctx, idempotencyKey, hash, (ctx) => verb(ctx, input, event));
-		} catch (thrown) {
-			const { status, problems } = knownFault(thrown);
-			return fail(status, { problems, typed: typedText(fields) });
-		}
-		if (goesOn(done)) redirect(303, done.to);
-		return done as Kept<R>;
-	};
+			return once(ctx, key, hash, (ctx) => verb(ctx, input, event));
+		});
 }

@@ -1,15 +1,25 @@
 import type { Ability } from '$lib/people/role';
 import { Refused } from '$lib/refusal';
-import { json } from '@sveltejs/kit';
+import { isHttpError, isRedirect, json } from '@sveltejs/kit';
 import type { z } from 'zod';
 import type { Context } from '../context';
+import { FAULT_SAID } from '../http/fault';
+import { bodyRefused } from '../http/form';
+import { logFault } from '../log';
 import { contextFor, knownFault, type Event } from './doorkeeper';
 import { fingerprint, once } from './once';
 
-function jsonFault(thrown: unknown): Response {
-	const { status, code, problems } = knownFault(thrown);
-	const { field, message } = problems[0]!;
-	return json({ code, message, ...(field ? { field } : {}) }, { status });
+/** Every fault as data, with the same fields: what we know in its own words, the rest with a number. */
+export function jsonFault(thrown: unknown, where: Event): Response {
+	try {
+		const { status, code, problems } = knownFault(thrown);
+		const { field, message } = problems[0]!;
+		return json({ code, message, ...(field ? { field } : {}) }, { status });
+	} catch (unknown) {
+		if (isRedirect(unknown) || isHttpError(unknown)) throw unknown;
+		const id = logFault(unknown, { status: 500, route: where.route.id });
+		return json({ code: 'fault', message: FAULT_SAID, id }, { status: 500 });
+	}
 }
 
 /** A GET of the outside edge. A Response passes as it is (pictures). */
@@ -22,7 +32,7 @@ export function read<E extends Event>(
 			const body = await work(contextFor(event, ability), event);
 			return body instanceof Response ? body : json(body);
 		} catch (thrown) {
-			return jsonFault(thrown);
+			return jsonFault(thrown, event);
 		}
 	};
 }
@@ -48,7 +58,7 @@ export function change<S extends z.ZodType, E extends Event>(
 			const answer = await once(ctx, key, hash, (ctx) => work(ctx, input, event));
 			return json(answer.body, { status: answer.status ?? 200 });
 		} catch (thrown) {
-			return jsonFault(thrown);
+			return jsonFault(thrown, event);
 		}
 	};
 }
@@ -65,11 +75,10 @@ export function changeKey(event: Event): string {
 }
 
 async function sentBody(request: Request): Promise<unknown> {
-	const text = await request.text();
-	if (text === '') return {};
 	try {
-		return JSON.parse(text);
-	} catch {
-		throw new Refused('bad input', 'Send the fields as JSON.');
+		const text = await request.text();
+		return text === '' ? {} : JSON.parse(text);
+	} catch (fault) {
+		throw bodyRefused(fault, 'Send the fields as JSON.');
 	}
 }

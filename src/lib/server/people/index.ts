@@ -3,14 +3,14 @@
 // Not for: what a shop holds (donors, parts, prices).
 export { allow } from './allow';
 export { authHandle, SignInFailed, signIn, signOut } from './auth';
-export { action, contextFor, page } from './doorkeeper';
-export { change, changeKey, read } from './edge';
+export { action, answerForm, contextFor, formKey, page } from './doorkeeper';
+export { change, changeKey, jsonFault, read } from './edge';
 export { identify } from './identify';
 export { acceptInvite, findInvite } from './accept-invite';
 export { inviteMember, withdrawInvite } from './invites';
 export { addKey, revokeKey } from './keys';
 export { editMember, listInvites, listMembers } from './members';
-export { fingerprint, once } from './once';
+export { fingerprint, once, wasAnswered } from './once';
 export { record, type Happening } from './record';
 export { editPolicy, editShop, getPolicy, getPolicyRow, getShop, setSeason } from './settings';
 export { allShopIds, shopsOf, type Membership } from './shops';

@@ -2,6 +2,7 @@ import { Refused } from '$lib/refusal';
 import { and, eq } from 'drizzle-orm';
 import { createHash } from 'node:crypto';
 import { inShop, type Context } from '../context';
+import type { Tx } from '../db';
 import { answered } from './tables';
 
 /** A fingerprint of what was asked for, so that a key cannot be used for something else. */
@@ -11,6 +12,20 @@ export const fingerprint = (where: string, input: unknown): string =>
 		.update('\n')
 		.update(JSON.stringify(input) ?? '')
 		.digest('base64url');
+
+const mine = (ctx: Context, key: string) =>
+	and(eq(answered.shopId, ctx.shopId), eq(answered.memberId, ctx.memberId), eq(answered.key, key));
+
+async function before(tx: Tx, ctx: Context, key: string, bodyHash: string) {
+	const [row] = await tx.select().from(answered).where(mine(ctx, key));
+	if (row && row.bodyHash !== bodyHash)
+		throw new Refused('key reused', 'This key was used for another change. Send a new one.');
+	return row;
+}
+
+/** Whether a change was answered already: what is dear, like a photo, need not be made again. */
+export const wasAnswered = (ctx: Context, key: string, bodyHash: string): Promise<boolean> =>
+	inShop(ctx, async (tx, ctx) => (await before(tx, ctx, key, bodyHash)) !== undefined);
 
 /**
  * Does a change once per key, in the same transaction as the change itself: the same key and body again
@@ -23,26 +38,16 @@ export const once = <T>(
 	work: (ctx: Context) => Promise<T>
 ): Promise<T> =>
 	inShop(ctx, async (tx, ctx) => {
-		const mine = and(
-			eq(answered.shopId, ctx.shopId),
-			eq(answered.memberId, ctx.memberId),
-			eq(answered.key, key)
-		);
 		const [first] = await tx
 			.insert(answered)
 			.values({ shopId: ctx.shopId, memberId: ctx.memberId, key, bodyHash, at: ctx.now })
 			.onConflictDoNothing()
 			.returning({ key: answered.key });
-		if (!first) {
-			const [before] = await tx.select().from(answered).where(mine);
-			if (before?.bodyHash !== bodyHash)
-				throw new Refused('key reused', 'This key was used for another change. Send a new one.');
-			return before.answer as T;
-		}
+		if (!first) return (await before(tx, ctx, key, bodyHash))?.answer as T;
 		const answer = await work(ctx);
 		await tx
 			.update(answered)
 			.set({ answer: answer ?? null })
-			.where(mine);
+			.where(mine(ctx, key));
 		return answer;
 	});

@@ -1,6 +1,6 @@
 import { Logger, parseCronItems, run, type Runner } from 'graphile-worker';
 import { env } from '../env';
-import { log } from '../log';
+import { log, unnamed } from '../log';
 
 export { enqueue } from './enqueue';
 
@@ -39,5 +39,5 @@ export async function stopQueue(): Promise<void> {
 
 const quiet = () =>
 	new Logger(() => (level, message) => {
-		if (level === 'error' || level === 'warning') log().warn({ message }, 'queue');
+		if (level === 'error' || level === 'warning') log().warn({ message: unnamed(message) }, 'queue');
 	});
