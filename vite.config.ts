@@ -10,7 +10,12 @@ export default defineConfig({
 				extends: true,
 				test: {
 					name: 'pure',
-					include: ['src/lib/**/*.test.ts', 'tests/*.test.ts', 'src/run/**/*.test.js'],
+					include: [
+						'src/lib/**/*.test.ts',
+						'tests/*.test.ts',
+						'tests/bench/**/*.test.ts',
+						'src/run/**/*.test.js'
+					],
 					exclude: ['src/lib/server/**'],
 					environment: 'node'
 				}

@@ -74,7 +74,7 @@ function serverEnv() {
 		HOST: settings.host,
 		ORIGIN: settings.origin,
 		BODY_SIZE_LIMIT: '30M',
-		SHUTDOWN_TIMEOUT: '5'
+		SHUTDOWN_TIMEOUT: '3'
 	};
 }
 

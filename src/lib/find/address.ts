@@ -6,12 +6,27 @@ export interface Question {
 	bin?: string | undefined;
 	state?: string | undefined;
 	donor?: string | undefined;
+	engine?: string | undefined;
+	price?: string | undefined;
+	proof?: string | undefined;
+	/** A group of the same things, taken apart. */
+	same?: string | undefined;
+	sort?: string | undefined;
+	down?: string | undefined;
+	/** Columns of the table, apart by dots. */
+	columns?: string | undefined;
 	view?: string | undefined;
 	limit?: number | undefined;
 	cursor?: string | undefined;
 }
 
-const ORDER = ['q', 'kind', 'grade', 'bin', 'state', 'donor', 'view', 'limit', 'cursor'] as const;
+/** What narrows an answer; a link that starts afresh takes all of it off. */
+export const NARROWING = [
+	...(['kind', 'grade', 'state', 'bin', 'engine', 'price', 'proof', 'donor', 'same'] as const)
+];
+const ORDER = [
+	...(['q', ...NARROWING, 'sort', 'down', 'columns', 'view', 'limit', 'cursor'] as const)
+];
 const USUAL_LIMIT = 25;
 const MOST = 100;
 
@@ -30,6 +45,10 @@ export function searchOf(question: Question, change: Question = {}): string {
 	}
 	return asked.toString();
 }
+
+/** The address without anything that narrows, and with what is to be changed. */
+export const searchAfresh = (question: Question, change: Question = {}): string =>
+	searchOf(question, { ...Object.fromEntries(NARROWING.map((name) => [name, ''])), ...change });
 
 /** The address that shows more: a longer list first, the following page once it is as long as may be. */
 export function moreOf(question: Question, next: string | null): string | null {

@@ -1,6 +1,10 @@
-import { readTag } from '../codes';
-import { numberKey } from '../codes/number';
-import { kindWords, matchKinds, type KindMatch } from '../trade';
+import { engineKey } from '../codes/number';
+import { plainFractions, tokensOf, type Token } from '../donors/lexemes';
+import { readCause, readMonth } from './cause-words';
+import { readKinds } from './kinds-said';
+import { NO_WORDS, type Lexicon } from './lexicon';
+import { asDoubtful, asNumber, asTags, type Doubtful } from './number';
+import { readFilters, type SaidFilters } from './said-filters';
 import { WEAK_WORDS } from './weak-words';
 
 /** What somebody typed, read into what it may mean. */
@@ -8,91 +12,142 @@ export interface Plan {
 	/** All of it, tidied; '' when nothing was typed. */
 	text: string;
 	tag: string | null;
+	/** Tags that it would be with one character put right. */
+	nearTags: string[];
 	/** All of it as a part number, in the spelling in which numbers are compared. */
 	numberKey: string | null;
+	doubtful: Doubtful | null;
 	donorNumber: number | null;
 	/** An address, or the beginning of addresses: K3 stands for K3-1 and K3-2. */
 	bin: string | null;
 	kinds: string[];
 	/** Kinds that only come near: offered, not searched. */
 	nearKinds: string[];
+	/** Kinds that the same word may mean: somebody has to say which. */
+	ask: string[];
+	/** Each of these ways to say a thing counts; all things must be there. */
+	needs: Need[];
+	/** The same without the kinds: every word to the letter. */
+	literally: Need[];
+	/** Colours and the like: they move an answer up and shut none out. */
+	weak: string[];
+	filters: SaidFilters;
+	/** What names the engine, as engines are compared. */
+	engine: string[];
+	/** Words that are left, as typed. */
 	words: string[];
+}
+
+/** One thing that was said: the lexemes that mean it, and those that come near; a * stands for any ending. */
+export interface Need {
+	said: string;
+	exact: string[];
+	near: string[];
 }
 
 const DONOR = /^d0*([1-9]\d{0,6})$/;
 const BIN = /^[a-z]{1,3}\d{1,2}(-\d{1,3})?$/;
-const MOST_WORDS = 6;
+const MOST_WORDS = 8;
+/** Heard with a part, but it may stand in a note: it moves an answer up. */
+const COLOURS = 'red blue black white green yellow orange gray grey silver gold brown purple old big small'.split(' ');
 
 const tidy = (typed: string): string =>
-	typed
-		.slice(0, 200)
+	plainFractions(typed.slice(0, 200))
 		.normalize('NFKC')
 		.replace(/[\p{C}\s]+/gu, ' ')
 		.trim();
 
-const tokensOf = (text: string): string[] =>
+const piecesOf = (text: string) =>
 	text
-		.toLowerCase()
 		.split(/[^\p{L}\p{N}./-]+/u)
 		.map((token) => token.replace(/^[./-]+|[./-]+$/g, ''))
 		.filter(Boolean);
 
-const isSure = ({ how }: KindMatch) => how !== 'near';
-
-/** A number if 4 to 24 long, with a digit, of pieces that are digits or short and name no kind. */
-function asNumber(text: string): string | null {
-	const key = numberKey(text);
-	if (key.length < 4 || key.length > 24 || !/\d/.test(text)) return null;
-	const pieces = text.split(/[^\p{L}\p{N}]+/u).filter(Boolean);
-	const fits = pieces.every((piece) => /\d/.test(piece) || piece.length <= 4);
-	return fits && !pieces.some((piece) => matchKinds(piece).some(isSure)) ? key : null;
+/** Power by displacement, as small engines are built: 28 to 36 cc for each horsepower. */
+function classOf(hp: number): string[] {
+	const from = Math.ceil(hp * 28);
+	const count = Math.min(Math.floor(hp * 36) - from + 1, 120);
+	return hp > 0 && count > 0 ? Array.from({ length: count }, (_, at) => `${from + at}cc`) : [];
 }
 
-function asKinds(text: string): { kinds: string[]; nearKinds: string[] } {
-	const matches = matchKinds(text);
-	const sure = matches.filter(isSure);
-	const strong = tokensOf(text).filter((token) => !WEAK_WORDS.has(token));
-	const near = sure.length > 0 ? [] : matchKinds(strong.join(' '));
-	const ids = (some: KindMatch[]) => some.map((match) => match.kind.id);
-	return sure.length > 0
-		? { kinds: ids(sure), nearKinds: ids(matches.filter((match) => !isSure(match))) }
-		: { kinds: ids(near.slice(0, 1)), nearKinds: ids(near.slice(1)) };
+function needOf({ said, is, lexeme, pieces }: Token, last: boolean, words: Lexicon): Need {
+	if (is === 'size') return { said, exact: [lexeme], near: [lexeme] };
+	if (is === 'amount') {
+		const hp = /^([\d.]+)hp$/.exec(lexeme)?.[1];
+		const exact = [lexeme, ...pieces];
+		return { said, exact, near: hp ? [...exact, ...classOf(Number(hp))] : exact };
+	}
+	if (is === 'code') {
+		const exact = /^[1-9]\d{1,3}$/.test(lexeme) ? [lexeme, `${Number(lexeme)}cc`] : [lexeme];
+		return { said, exact, near: lexeme.length > 2 || last ? [...exact, `${lexeme}*`] : exact };
+	}
+	const near = words.has(lexeme) ? [] : words.nearest(lexeme);
+	const open = lexeme.length > 2 || last ? [`${lexeme}*`] : [];
+	return { said, exact: [lexeme], near: [lexeme, ...near, ...open] };
 }
 
-/** Whether a word only says the kind again, however it is spelt. */
-function saysKind(word: string, kinds: readonly string[]): boolean {
-	if (kinds.some((id) => kindWords(id).includes(word.replace(/s$/, '')))) return true;
-	return matchKinds(word).some((match) => kinds.includes(match.kind.id));
+const isWeak = ({ said, lexeme }: Token) => WEAK_WORDS.has(said) || WEAK_WORDS.has(lexeme);
+
+/** What names an engine: codes where there are any, else the words. */
+function engineOf(tokens: readonly Token[]): string[] {
+	const codes = tokens.filter(({ is, lexeme }) => is === 'code' && (lexeme.length > 3 || /[A-Z]/.test(lexeme)));
+	const words = tokens.filter(({ is, lexeme }) => is === 'word' && lexeme.length > 2);
+	const naming = codes.length > 0 ? codes : words;
+	return naming.map(({ said }) => engineKey(said)).filter(Boolean);
 }
 
-function theRest(tokens: readonly string[], kinds: readonly string[]): string[] {
-	const rest = tokens.filter(
-		(token) => token.length > 1 && !WEAK_WORDS.has(token) && !saysKind(token, kinds)
-	);
-	return [...new Set(rest)].slice(0, MOST_WORDS);
+function place(pieces: readonly string[], kinds: readonly string[], isDated: boolean) {
+	const donor = pieces.find((piece) => DONOR.test(piece));
+	const bin = pieces.find((piece) => piece !== donor && BIN.test(piece));
+	const sure = bin && (pieces.length === 1 || kinds.length > 0 || bin.includes('-') || isDated);
+	return { donor, bin: sure ? bin : undefined };
 }
 
 /**
- * Reads what was typed. In: anything, any length. Out: the tag, part number, donor, bin, kinds and
- * words that it may mean; words that say nothing are dropped. Never throws.
+ * Reads what was typed. In: anything, any length; the words that the shop has written. Out: the tag,
+ * part number, donor, bin, kinds, sizes, cause, month, filters and words that it may mean; what says
+ * nothing is dropped. Never throws.
  */
-export function readSearch(typed: string): Plan {
+export function readSearch(typed: string, words: Lexicon = NO_WORDS): Plan {
 	const text = tidy(typed);
-	const tokens = tokensOf(text);
-	const tag = readTag(text);
-	const donor = tokens.find((token) => DONOR.test(token));
-	const bin = tokens.find((token) => token !== donor && BIN.test(token)) ?? null;
-	const { kinds, nearKinds } = asKinds(text);
-	const isPlace = bin !== null && (tokens.length === 1 || kinds.length > 0 || bin.includes('-'));
-	const left = tokens.filter((token) => token !== donor && !(isPlace && token === bin));
+	const { rest: unfiltered, ...filters } = readFilters(text.toLowerCase());
+	const { month, rest: undated } = readMonth(unfiltered);
+	const { causes, said: caused, rest } = readCause(undated);
+	const { kinds, nearKinds, ask, saysKind } = readKinds(rest, words);
+	const { donor, bin } = place(piecesOf(rest), kinds, month !== null);
+	const { tag, near: nearTags } = asTags(text);
+	const doubtful = asDoubtful(text);
+	const all = tokensOf(rest).filter(({ said }) => said !== donor && said !== bin && !said.includes('?'));
+	const left = all.filter((token) => !isWeak(token) && !saysKind(token)).slice(0, MOST_WORDS);
+	const last = all.at(-1);
+	const asNeed = (token: Token) => needOf(token, token === last, words);
+	const around = [
+		...(month ? [{ said: month, exact: [`@${month}`], near: [`@${month}`] }] : []),
+		...(causes.length > 0 ? [causeNeed(caused, causes)] : [])
+	];
 	return {
 		text,
-		tag: 'tag' in tag ? tag.tag : null,
-		numberKey: asNumber(text),
+		tag,
+		nearTags: kinds.length > 0 ? [] : nearTags,
+		numberKey: kinds.length === 0 || asNumber(text) ? asNumber(text) : null,
+		doubtful,
 		donorNumber: donor ? Number(DONOR.exec(donor)?.[1]) : null,
-		bin: isPlace ? bin.toUpperCase() : null,
+		bin: bin?.toUpperCase() ?? null,
 		kinds,
 		nearKinds,
-		words: theRest(left, kinds)
+		ask,
+		needs: [...left.map(asNeed), ...around],
+		literally: [...all.filter((token) => !isWeak(token)).slice(0, MOST_WORDS).map(asNeed), ...around],
+		weak: all.map(({ lexeme }) => lexeme).filter((lexeme) => COLOURS.includes(lexeme)),
+		filters,
+		engine: engineOf(left),
+		words: left.map(({ said }) => said)
 	};
+}
+
+function causeNeed(said: string, causes: readonly string[]): Need {
+	const known = causes.map((cause) => `~${cause}`);
+	const [word] = tokensOf(said);
+	const exact = word ? [...known, word.lexeme] : known;
+	return { said, exact, near: exact };
 }

@@ -1,7 +1,8 @@
 import { z } from 'zod';
 import { ownPath } from '../people/own-path';
 import { typedAmount } from '../people/typed-money';
-import { ASK_GRADE, Edit, gradeOrScrap, logged, Proof, words, yesNo } from './input';
+import { ASK_GRADE, Edit, gradeOrScrap, logged, Proof } from './input';
+import { words, yesNo } from './typed';
 
 /** Logging as a flat form sends it: the proof's fields beside the others, `scrap` a button. */
 export const LogForm = z

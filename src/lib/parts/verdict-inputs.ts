@@ -105,19 +105,7 @@ export function gainInput(
 		labour,
 		minutesNow: subject.stillOn ? figures.pullMinutes + policy.keepMinutes : 0,
 		minutesLater: isTested(subject) ? 0 : figures.cleanMinutes + figures.testMinutes,
-		waiting: subject.waiting ? policy.waitingChance : 0
+		waiting: subject.waiting ? policy.waitingChance : 0,
+		workWhenCalledOnly: !kind(subject.kind).cleanKeeps
 	};
 }
-
-const DEAR = 1e9;
-
-/**
- * The same part where the work must wait for the call: a minute of cleaning now is made so dear that
- * it never pays, what is paid now for pulling stays the same to the cent.
- */
-export const onlyWhenCalled = (input: GainInput): GainInput => ({
-	...input,
-	labourNow: DEAR,
-	minutesNow: (input.labourNow * input.minutesNow) / DEAR,
-	minutesLater: Math.max(input.minutesLater, 1e-4)
-});

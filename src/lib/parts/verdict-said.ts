@@ -19,13 +19,13 @@ export function timingSaid({
 	return timing === 'now' ? 'Clean and test it today.' : 'Clean and test it when somebody calls.';
 }
 
-/** How many of these to keep, and how many there are. */
+/** How many of these to keep, and how many there are to hand out: one in the red bin or held is none. */
 export function keepSaid({ gainCents, keepUpTo, have }: Verdict): string | null {
 	if (gainCents === null) return null;
-	if (keepUpTo === null) return `Keep all that come in: you have ${have}.`;
+	if (keepUpTo === null) return `Keep all that come in: ${have} to hand out.`;
 	return keepUpTo === 0
-		? `Keep none: you have ${have}.`
-		: `Keep up to ${keepUpTo}: you have ${have}.`;
+		? `Keep none: ${have} to hand out.`
+		: `Keep up to ${keepUpTo}: ${have} to hand out.`;
 }
 
 /** From which price of a new one keeping pays. */

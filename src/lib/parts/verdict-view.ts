@@ -16,7 +16,7 @@ export interface VerdictSubject {
 	proofs: readonly { how: ProofWay; passed: boolean }[];
 	/** Place in the queue, 1 for the first. */
 	place: number;
-	/** How many of the same the shop has, this one included. */
+	/** How many that answer the same call can be handed out: this one too unless it is held, back or missing. */
 	have: number;
 	price: VerdictPrice | null;
 	massGrams: number | null;

@@ -2,14 +2,7 @@ import type { Policy } from '$lib/people/policy';
 import type { Season } from '$lib/people/settings';
 import { causeSaid, chanceLevel, kind, whyChance, type ChanceGood } from '$lib/trade';
 import { gain, verdictWord, type Gain, type GainInput, type VerdictWord } from '$lib/worth';
-import {
-	chanceOf,
-	gainInput,
-	isTested,
-	onlyWhenCalled,
-	priceAt,
-	pricedGrade
-} from './verdict-inputs';
+import { chanceOf, gainInput, isTested, priceAt, pricedGrade } from './verdict-inputs';
 import { verdictTerms } from './verdict-terms';
 import type { Verdict, VerdictPrice, VerdictSubject } from './verdict-view';
 import type { Grade } from './words';
@@ -35,12 +28,9 @@ interface Worked {
 	gain: Gain;
 }
 
-/** Where cleaning does not keep, the work is always done when called. */
 function work(subject: VerdictSubject, policy: Policy, season: Season, usedCents: number): Worked {
 	const input = gainInput(subject, policy, season, usedCents);
-	const forced = !kind(subject.kind).cleanKeeps;
-	const free = gain(input);
-	return { input, gain: forced ? { ...gain(onlyWhenCalled(input)), terms: free.terms } : free };
+	return { input, gain: gain(input) };
 }
 
 /** The lowest new price at which keeping pays; none where the cap of the copy binds first. */

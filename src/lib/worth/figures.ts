@@ -35,7 +35,7 @@ export function check<Input extends object>(
 	if (typeof input !== 'object' || input === null) {
 		throw new WorthError('input', 'input: an object with the figures is needed');
 	}
-	for (const field of Object.keys(figures) as (keyof Input & string)[]) {
+	for (const field in figures) {
 		const figure = figures[field];
 		const value: unknown = input[field];
 		if (!figure || (figure.optional && (value === undefined || value === null))) continue;

@@ -23,9 +23,13 @@ export interface GainInput {
 	minutesNow: number;
 	minutesLater: number;
 	waiting?: number | null;
+	/** Cleaning that does not keep: the work is always done when called. */
+	workWhenCalledOnly?: boolean | null;
 }
 
-export type GainFigures = { [Field in keyof GainInput]-?: number };
+export type GainFigures = {
+	[Field in Exclude<keyof GainInput, 'workWhenCalledOnly'>]-?: number;
+} & { workWhenCalledOnly: boolean };
 
 const figures = {
 	usedCents: amount('used price in cents'),
@@ -55,5 +59,17 @@ export function gainFigures(input: GainInput): GainFigures {
 			'callsPerYear: calls per year, above 0 where moneyRate and dyingRate are both 0'
 		);
 	}
-	return { ...input, kitCents: input.kitCents ?? 0, waiting: input.waiting ?? 0 };
+	const { workWhenCalledOnly = false } = input;
+	if (workWhenCalledOnly !== null && typeof workWhenCalledOnly !== 'boolean') {
+		throw new WorthError(
+			'workWhenCalledOnly',
+			'workWhenCalledOnly: whether the work must wait for the call, true or false'
+		);
+	}
+	return {
+		...input,
+		kitCents: input.kitCents ?? 0,
+		waiting: input.waiting ?? 0,
+		workWhenCalledOnly: workWhenCalledOnly ?? false
+	};
 }

@@ -23,12 +23,14 @@ const parts: fc.Arbitrary<GainInput> = fc.record({
 	labour: fc.integer({ min: 0, max: 200 }),
 	minutesNow: fc.integer({ min: 0, max: 60 }),
 	minutesLater: fc.integer({ min: 0, max: 60 }),
-	waiting: fc.oneof(fc.constant(0), within(0, 1))
+	waiting: fc.oneof(fc.constant(0), within(0, 1)),
+	workWhenCalledOnly: fc.boolean()
 });
 
 const exact = (part: GainInput) => {
 	const { terms } = gain(part);
-	return Math.max(terms.whenCalled, terms.now) - terms.scrap;
+	const now = part.workWhenCalledOnly ? -Infinity : terms.now;
+	return Math.max(terms.whenCalled, now) - terms.scrap;
 };
 const atLeastNil = (part: GainInput) => Math.max(exact(part), 0);
 

@@ -157,6 +157,21 @@ describe('the edges', () => {
 		expect(gain({ ...unasked, waiting: 0.5 }).waitYears).toBeNull();
 	});
 
+	it('cleaning that does not keep is done when called, whatever now would bring', () => {
+		const slow = { ...one, labourNow: 5, chanceGood: 0.9, minutesLater: 25 };
+		const free = gain(slow);
+		expect(free.timing).toBe('now');
+		const forced = gain({ ...slow, workWhenCalledOnly: true });
+		expect(forced.timing).toBe('when-called');
+		expect(forced.terms).toEqual(free.terms);
+		expect(forced.gainCents).toBe(Math.round(free.terms.whenCalled - 20));
+		expect(forced.keepUpTo).toBe(largest(slow, underA));
+		expect(forced.breakEvenUsedCents).toBe(Math.round(breakEven(gainFigures(slow))!.whenCalled));
+		expect(() => gain({ ...one, workWhenCalledOnly: 1 as never })).toThrow(
+			expect.objectContaining({ field: 'workWhenCalledOnly' })
+		);
+	});
+
 	it('ties go to the work that can wait', () => {
 		const proven = { ...one, chanceGood: 1, minutesLater: 0 };
 		expect(gain(proven).timing).toBe('when-called');

@@ -2,7 +2,7 @@ import { breakEven } from './break-even';
 import { gainFigures, type GainInput } from './gain-input';
 import { keepUpTo } from './keep-up-to';
 import { wholeCents } from './money';
-import { termsOf, type Terms } from './values';
+import { bestGain, bestTiming, termsOf, type Terms } from './values';
 import { everCalled, waitYears } from './waiting';
 
 export interface Gain {
@@ -27,7 +27,7 @@ function payable(cents: number): number | null {
  * cleaning and testing may wait until somebody calls.
  *
  * In: see GainInput. Out: `gainCents` and `breakEvenUsedCents` in whole cents (the lower price of
- * the two timings; null where no price helps), `timing` of the work, `keepUpTo` units (null: no
+ * the timings that there are; null where no price helps), `timing` of the work, `keepUpTo` units (null: no
  * limit), `waitYears` (null: nobody calls), `everCalled` 0 to 1, `gainPerMinute` in cents for each
  * minute spent now (null: none is), and the unrounded terms.
  * Throws WorthError naming the field, its unit and its range.
@@ -36,13 +36,15 @@ function payable(cents: number): number | null {
 export function gain(input: GainInput): Gain {
 	const part = gainFigures(input);
 	const terms = termsOf(part);
-	const worth = Math.max(terms.whenCalled, terms.now) - terms.scrap;
+	const worth = bestGain(part, terms);
 	const even = breakEven(part);
+	const least =
+		even && (part.workWhenCalledOnly ? even.whenCalled : Math.min(even.whenCalled, even.now));
 	return {
 		gainCents: wholeCents(worth),
-		timing: terms.whenCalled >= terms.now ? 'when-called' : 'now',
+		timing: bestTiming(part, terms),
 		keepUpTo: keepUpTo(part),
-		breakEvenUsedCents: even && payable(Math.min(even.whenCalled, even.now)),
+		breakEvenUsedCents: least === null ? null : payable(least),
 		waitYears: waitYears(part),
 		everCalled: everCalled(part),
 		gainPerMinute: part.minutesNow === 0 ? null : worth / part.minutesNow,

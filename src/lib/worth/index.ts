@@ -5,6 +5,7 @@
 export { WorthError } from './worth-error';
 export { yearlyToContinuous } from './rates';
 export { usedPrice, type Step, type UsedPrice, type UsedPriceInput } from './used-price';
+export { ownUse, type OwnUseInput } from './own-use';
 export { gain, type Gain } from './gain';
 export type { GainInput } from './gain-input';
 export type { Terms } from './values';
@@ -14,3 +15,8 @@ export { learnChance, type ChanceToLearn } from './learn-chance';
 export { learnRate, type RateToLearn } from './learn-rate';
 export { learnShare, type ShareToLearn, type SharesSeen } from './learn-share';
 export type { Learned, MeanPrior } from './learn-input';
+export { pullPlan, type PullPlan, type PullStep } from './pull-plan';
+export type { PullInput, PullPart } from './pull-input';
+export { decide, type ChoiceName, type Decision, type Tip } from './decide';
+export type { DecisionInput } from './decide-input';
+export { allocate, carry, type Allocation, type PartToCost, type Shares } from './allocate';

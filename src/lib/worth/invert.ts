@@ -1,4 +1,4 @@
-const TURNS = 200;
+const TURNS = 1200;
 
 /**
  * Where a rising function reaches a level, by halving the interval until no number is left between.

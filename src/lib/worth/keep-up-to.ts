@@ -25,16 +25,16 @@ function withWear(part: GainFigures): number {
 	const overScrap = good * (sale(part) - part.scrapCents);
 	const held = holding(part);
 	const allNow = part.labourNow * (part.minutesNow + part.minutesLater);
-	return Math.max(
-		largestByReach(
-			{
-				slope: overScrap + held - part.labour * part.minutesLater,
-				floor: held + part.labourNow * part.minutesNow
-			},
-			part
-		),
-		largestByReach({ slope: overScrap + good * held, floor: good * held + allNow }, part)
+	const whenCalled = largestByReach(
+		{
+			slope: overScrap + held - part.labour * part.minutesLater,
+			floor: held + part.labourNow * part.minutesNow
+		},
+		part
 	);
+	if (part.workWhenCalledOnly) return whenCalled;
+	const now = { slope: overScrap + good * held, floor: good * held + allNow };
+	return Math.max(whenCalled, largestByReach(now, part));
 }
 
 function withoutWear(part: GainFigures): number {
@@ -44,8 +44,10 @@ function withoutWear(part: GainFigures): number {
 		return yearly === 0 ? Infinity : Math.floor((inHand * part.callsPerYear) / yearly);
 	};
 	const now = part.labourNow * part.minutesNow;
+	const whenCalled = largest(overScrap - now - part.labour * part.minutesLater, part.shelfCents);
+	if (part.workWhenCalledOnly) return whenCalled;
 	return Math.max(
-		largest(overScrap - now - part.labour * part.minutesLater, part.shelfCents),
+		whenCalled,
 		largest(overScrap - now - part.labourNow * part.minutesLater, part.chanceGood * part.shelfCents)
 	);
 }

@@ -12,7 +12,8 @@ export interface ChanceToLearn {
 }
 
 function weights(prior: ChanceToLearn['prior']): { alpha: number; beta: number } {
-	if (!('mean' in within(prior, 'prior', 'alpha and beta, or mean and worth'))) {
+	within(prior, 'prior', 'alpha and beta, or mean and worth');
+	if (!('mean' in prior)) {
 		check(prior, { alpha: amount('weight of successes'), beta: amount('weight of failures') });
 		return prior;
 	}

@@ -32,7 +32,12 @@ export function tails(input: { level?: number | null }): { low: number; high: nu
 }
 
 /** Checks a prior said as a mean and its worth. `most` is the most that the mean can be. */
-export function meanPrior(prior: MeanPrior, unit: string, worthIn: string, most?: number): MeanPrior {
+export function meanPrior(
+	prior: MeanPrior,
+	unit: string,
+	worthIn: string,
+	most?: number
+): MeanPrior {
 	const mean = most === 1 ? share(unit) : amount(unit);
 	check(prior, { mean, worth: amount(worthIn) });
 	return prior;

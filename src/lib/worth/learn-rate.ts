@@ -14,7 +14,8 @@ export interface RateToLearn {
 const shapeAndYears = { shape: amount('calls that the prior is worth'), years: amount('years') };
 
 function gammaOf(prior: RateToLearn['prior']): { shape: number; years: number } {
-	if (!('mean' in within(prior, 'prior', 'shape and years, or mean and worth'))) {
+	within(prior, 'prior', 'shape and years, or mean and worth');
+	if (!('mean' in prior)) {
 		check(prior, shapeAndYears);
 		return prior;
 	}

@@ -1,8 +1,8 @@
-const LANCZOS = [
+const LANCZOS: readonly number[] = [
 	0.99999999999980993, 676.5203681218851, -1259.1392167224028, 771.32342877765313,
 	-176.61502916214059, 12.507343278686905, -0.13857109526572012, 9.9843695780195716e-6,
 	1.5056327351493116e-7
-] as const;
+];
 
 // x ln x - x + ... : Stirling's tail keeps its digits where x is large
 function stirling(x: number): number {

@@ -31,16 +31,18 @@ const figures = {
 	leastCents: amount('least price in cents')
 };
 
+const stepFigures = {
+	stepCents: { unit: 'rounding step in cents', least: 1, whole: true },
+	underCents: { unit: 'cents up to which a step counts', optional: true }
+};
+
 function checkSteps(steps: UsedPriceInput['stepCents']): readonly Step[] {
 	const table = typeof steps === 'number' ? [{ stepCents: steps }] : steps;
 	if (!Array.isArray(table) || table.length === 0) {
 		throw new WorthError('stepCents', 'stepCents: a step in cents, or a table of steps');
 	}
 	for (const step of table as readonly Step[]) {
-		check(step, {
-			stepCents: { unit: 'rounding step in cents', least: 1, whole: true },
-			underCents: { unit: 'cents up to which a step counts', optional: true }
-		});
+		check(step, stepFigures);
 	}
 	return table as readonly Step[];
 }

@@ -63,8 +63,13 @@ export function termsOf(part: GainFigures): Terms {
 	};
 }
 
+/** When the work is best done: when called wherever it must be, or where that is no worse. */
+export function bestTiming(part: GainFigures, terms: Terms): 'when-called' | 'now' {
+	return part.workWhenCalledOnly || terms.whenCalled >= terms.now ? 'when-called' : 'now';
+}
+
 /** What keeping is worth against scrapping it now, in cents, unrounded: the better of the two. */
-export function bestGain(part: GainFigures): number {
-	const terms = termsOf(part);
-	return Math.max(terms.whenCalled, terms.now) - terms.scrap;
+export function bestGain(part: GainFigures, terms = termsOf(part)): number {
+	const best = bestTiming(part, terms) === 'now' ? terms.now : terms.whenCalled;
+	return best - terms.scrap;
 }

@@ -1,8 +1,13 @@
 import { storeAnswers } from '$lib/server/storage';
 import { sql } from 'drizzle-orm';
 
+const LONGEST_MS = 3000;
+
+const late = () =>
+	new Promise((_, no) => setTimeout(() => no(new Error('late')), LONGEST_MS).unref());
+
 const answers = (work: Promise<unknown>) =>
-	work.then(
+	Promise.race([work, late()]).then(
 		() => 'ok',
 		() => 'no answer'
 	);

@@ -24,7 +24,7 @@ export async function e2e(place, stopping) {
 		HOST: '127.0.0.1',
 		ORIGIN: origin,
 		BODY_SIZE_LIMIT: '30M',
-		SHUTDOWN_TIMEOUT: '5',
+		SHUTDOWN_TIMEOUT: '3',
 		DATABASE_URL: urls.app,
 		DATABASE_WORKER_URL: urls.worker
 	};

@@ -64,8 +64,8 @@ export const SCENARIOS: readonly Scenario[] = [
 	{
 		...base,
 		name: 'busy shop',
-		donorsPerYear: 120,
-		families: 16,
+		donorsPerYear: 100,
+		families: 14,
 		marks: [
 			[1, 1],
 			[3, 2]

@@ -15,6 +15,8 @@ export interface KindTruth {
 	/** Times the kind's usual calls. */
 	calls: number;
 	chances: Readonly<Record<Level, number>>;
+	/** Spread between families beyond their mark, of the logarithm. */
+	spread: number;
 }
 
 const THREE = 3;
@@ -33,17 +35,18 @@ export function kindTruth(name: TruthName, from: Draws): KindTruth {
 	const usual = DEFAULT_POLICY.chances;
 	switch (name) {
 		case 'as the defaults say':
-			return { calls: 1, chances: usual };
+			return { calls: 1, chances: usual, spread: 0 };
 		case 'a third of the calls':
-			return { calls: 1 / THREE, chances: usual };
+			return { calls: 1 / THREE, chances: usual, spread: 0 };
 		case 'three times the calls':
-			return { calls: THREE, chances: usual };
+			return { calls: THREE, chances: usual, spread: 0 };
 		case 'calls and chances mixed':
 			return {
 				calls: up ? THREE : 1 / THREE,
-				chances: withOdds(usual, chanceUp ? THREE : 1 / THREE)
+				chances: withOdds(usual, chanceUp ? THREE : 1 / THREE),
+				spread: 0
 			};
 		case 'scattered':
-			return { calls: scatter, chances: usual };
+			return { calls: scatter, chances: usual, spread: 0.5 };
 	}
 }

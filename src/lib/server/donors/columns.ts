@@ -1,5 +1,6 @@
 import { engineKey } from '$lib/codes/number';
 import type { DonorEdit } from '$lib/donors/input';
+import { engineLexemes } from '$lib/donors/lexemes';
 import { may } from '$lib/people/role';
 import { Refused } from '$lib/refusal';
 import type { Context } from '../context';
@@ -8,6 +9,11 @@ import type { DonorRow } from './rows';
 type Columns = Partial<
 	Omit<DonorRow, 'shopId' | 'id' | 'number' | 'state' | 'version' | 'takenInAt'>
 >;
+
+const NOT_READ = {
+	...{ maker: '', model: '', typeCode: '', dateCode: '', serial: '', offMachine: '' },
+	...{ displacementCc: null, shaft: null }
+};
 
 /** What was said about a donor, in the columns of its row; what was not said is not touched. */
 export function donorColumns(ctx: Context, input: DonorEdit, before?: DonorRow): Columns {
@@ -19,7 +25,8 @@ export function donorColumns(ctx: Context, input: DonorEdit, before?: DonorRow):
 		columns.engineKey = engineKey(
 			`${input.maker ?? before?.maker ?? ''} ${input.model ?? before?.model ?? ''}`
 		);
-	return { ...columns, ...causeColumns(input, before) };
+	const searchWords = engineLexemes({ ...NOT_READ, ...before, ...columns });
+	return { ...columns, searchWords, ...causeColumns(input, before) };
 }
 
 /** A cause is never surer than somebody said, and a second one never stands alone or twice. */

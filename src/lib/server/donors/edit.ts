@@ -4,9 +4,7 @@ import { Refused } from '$lib/refusal';
 import { SAFE_TICKS } from '$lib/trade';
 import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
-import type { Tx } from '../db';
 import { allow, record } from '../people';
-import { enqueue } from '../queue/enqueue';
 import { donorColumns } from './columns';
 import { donorRow, type DonorRow } from './rows';
 import { donor } from './tables';
@@ -49,16 +47,6 @@ function needVersion(row: DonorRow, version: number | undefined, typed: Partial<
 	);
 }
 
-/** What the parts of a donor are found and judged by. */
-const TOLD = ['maker', 'model', 'typeCode', 'engineClass', 'cause', 'secondCause'] as const;
-
-async function tellParts(tx: Tx, ctx: Context, row: DonorRow, typed: Partial<DonorRow>) {
-	if (!TOLD.some((field) => field in typed && plain(row[field]) !== plain(typed[field]))) return;
-	const { shopId, memberId } = ctx;
-	const job = { shopId, memberId, donorId: row.id };
-	await enqueue(tx, 'donors.changed', job, `donors.changed ${shopId} ${row.id}`);
-}
-
 const save = (
 	ctx: Context,
 	ref: string,
@@ -75,8 +63,7 @@ const save = (
 			.update(donor)
 			.set({ ...typed, version: row.version + 1 })
 			.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, row.id)));
-		await tellParts(tx, ctx, row, typed);
-		const { paidCents: _, ...detail } = typed;
+		const { paidCents: _, searchWords: _words, ...detail } = typed;
 		await record(tx, ctx, { about: 'donor', aboutId: row.id, what, detail });
 	});
 

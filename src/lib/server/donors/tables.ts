@@ -34,6 +34,10 @@ export const donor = pgTable(
 		engineClass: text('engine_class'),
 		fittings: textArray('fittings').notNull().default(emptyArray),
 		offMachine: text('off_machine').notNull().default(''),
+		searchWords: text('search_words').notNull().default(''),
+		serialKey: text('serial_key').generatedAlwaysAs(
+			sql`translate(regexp_replace(upper(serial), '[^0-9A-Z]', '', 'g'), 'OI', '01')`
+		),
 		cause: text('cause'),
 		secondCause: text('second_cause'),
 		sureness: text('sureness', { enum: SURENESS }),
@@ -49,6 +53,10 @@ export const donor = pgTable(
 		primaryKey({ columns: [t.shopId, t.id] }),
 		unique('donor_number').on(t.shopId, t.number),
 		index('donor_engine').on(t.shopId, t.engineKey),
+		index('donor_serial').on(t.shopId, t.serialKey, t.id),
+		index('donor_open')
+			.on(t.shopId, t.engineClass, t.id)
+			.where(sql`state in ('whole', 'on the bench', 'parked')`),
 		check('donor_state', sql`${t.state} in (${words(DONOR_STATES)})`),
 		check('donor_sureness', sql`${t.sureness} in (${words(SURENESS)})`),
 		check('donor_shaft', sql`${t.shaft} in (${words(SHAFTS)})`),
@@ -109,7 +117,10 @@ export const donorPhoto = pgTable(
 	(t) => [
 		primaryKey({ columns: [t.shopId, t.donorId, t.photoId] }),
 		foreignKey({ columns: [t.shopId, t.donorId], foreignColumns: [donor.shopId, donor.id] }),
-		foreignKey({ columns: [t.shopId, t.photoId], foreignColumns: [photo.shopId, photo.id] }),
+		foreignKey({
+			columns: [t.shopId, t.photoId],
+			foreignColumns: [photo.shopId, photo.id]
+		}).onDelete('cascade'),
 		check('donor_photo_shot', sql`${t.shot} in (${words(DONOR_SHOTS)})`)
 	]
 );

@@ -116,8 +116,8 @@ describe('finding parts', () => {
 		const grades = await ask(ours, { kind: 'recoil', grade: 'usable' });
 		expect(grades.items.map((item) => item.tag)).toEqual([here.recoil]);
 		expect(grades.facets.grade).toEqual([
-			{ value: 'untested', count: 1 },
-			{ value: 'usable', count: 1 }
+			{ value: 'usable', count: 1 },
+			{ value: 'untested', count: 1 }
 		]);
 		expect(grades.facets.kind).toContainEqual({
 			value: 'recoil',

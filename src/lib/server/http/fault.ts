@@ -37,8 +37,7 @@ function sentence(issue: z.core.$ZodIssue): string {
 		: 'Send the fields as JSON';
 }
 
-export const FAULT_SAID =
-	'Something went wrong on our side. Nothing you saved is lost; try again.';
+export const FAULT_SAID = 'Something went wrong on our side. Nothing you saved is lost; try again.';
 
 /** Figures, days and characters that no column holds: what checked them let something through. */
 const BEYOND = ['22003', '22007', '22008', '22021', '22P02', '22P05'];
@@ -73,7 +72,8 @@ export function faultOf(thrown: unknown): Fault {
 			problems: [
 				{
 					field: '',
-					message: 'A figure, day or character in this cannot be kept. Look at each and send it again.'
+					message:
+						'A figure, day or character in this cannot be kept. Look at each and send it again.'
 				}
 			]
 		};

@@ -9,11 +9,14 @@ export interface Letter {
 	key?: string;
 }
 
+/** Somebody waits for the answer while a sign-in letter leaves. */
+const PATIENCE = { connectionTimeout: 5000, greetingTimeout: 5000, socketTimeout: 10_000 };
+
 let post: Transporter | undefined;
 
 /** Sends one plain-text letter over SMTP; throws when the server does not take it. */
 export async function sendLetter(letter: Letter): Promise<void> {
-	post ??= nodemailer.createTransport(env().SMTP_URL);
+	post ??= nodemailer.createTransport({ url: env().SMTP_URL, ...PATIENCE });
 	const { key, ...rest } = letter;
 	const host = new URL(env().ORIGIN).hostname;
 	await post.sendMail({

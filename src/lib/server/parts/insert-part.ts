@@ -1,5 +1,6 @@
 import { engineKey } from '$lib/codes/number';
 import type { Pull } from '$lib/parts/input';
+import { searchWords } from '$lib/parts/search-words';
 import type { PartState } from '$lib/parts/words';
 import type { Context } from '../context';
 import type { Tx } from '../db';
@@ -8,7 +9,6 @@ import type { KeptPhoto } from '../photos';
 import { keysOf } from './edit';
 import type { Place } from './place';
 import { part } from './tables';
-import { wordsOf } from './words-of';
 
 /** Where a part comes from: its donor, or old stock that says itself which engine it fits. */
 export interface Origin {
@@ -58,10 +58,9 @@ export async function insertPart(
 		pulledAt: ctx.now,
 		changedAt: ctx.now
 	};
-	const searchText = await wordsOf(tx, ctx, row);
 	const [made] = await tx
 		.insert(part)
-		.values({ ...row, searchText })
+		.values({ ...row, searchWords: searchWords(row) })
 		.returning({ id: part.id });
 	return made!.id;
 }

@@ -1,7 +1,8 @@
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
+import { allow } from '../people';
 import { addPhotoRow, keepPhoto, type KeptPhoto } from '../photos';
-import { changePart, partFor, type Done } from './row';
+import { changePart, partFor, partRow, type Done } from './row';
 import { partPhoto } from './tables';
 
 /** A picture that is in the store already becomes one of the part's. */
@@ -29,5 +30,8 @@ export async function hangKept(
 }
 
 /** Cleans a picture, puts it into the store, then onto the part. */
-export const addPartPhoto = async (ctx: Context, tag: string, bytes: Buffer) =>
-	hangPhoto(ctx, tag, await keepPhoto(ctx, bytes));
+export async function addPartPhoto(ctx: Context, tag: string, bytes: Buffer) {
+	allow(ctx, 'work');
+	await inShop(ctx, (tx, ctx) => partRow(tx, ctx, tag));
+	return hangPhoto(ctx, tag, await keepPhoto(ctx, bytes));
+}

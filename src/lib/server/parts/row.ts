@@ -1,4 +1,5 @@
 import { readTag } from '$lib/codes';
+import { searchWords } from '$lib/parts/search-words';
 import { isMove, leads, NEEDS, whyNot, type Move, type PartFacts } from '$lib/parts/state';
 import type { PartState } from '$lib/parts/words';
 import { NotFound, Refused } from '$lib/refusal';
@@ -9,7 +10,6 @@ import { allow, record } from '../people';
 import { isDoubtful } from './doubt';
 import { part } from './tables';
 import { takenWords } from './taken';
-import { WORDED, wordsOf } from './words-of';
 
 export type PartRow = typeof part.$inferSelect;
 
@@ -52,6 +52,8 @@ export async function partFor(tx: Tx, ctx: Context, tag: string, move: Move): Pr
 	throw new Refused(no.code, no.code === 'taken' ? await takenWords(tx, ctx, row) : no.said);
 }
 
+const WORDED = ['label', 'numbers', 'note', 'engine', 'set'] as const;
+
 /**
  * Writes a change of a part with its event; `detail` also keeps what stood there before, for undoing.
  * One conditional UPDATE: of two who saw the same part, one changes it.
@@ -67,12 +69,11 @@ export async function changePart(
 	const next = { ...row, ...set };
 	if (isMove(what) && !leads(what, row.state, next.state))
 		throw new Error(`${what} cannot lead from ${row.state} to ${next.state}`);
-	const worded = WORDED.some((key) => key in set);
 	const [changed] = await tx
 		.update(part)
 		.set({
 			...set,
-			...(worded ? { searchText: await wordsOf(tx, ctx, next) } : {}),
+			...(WORDED.some((key) => key in set) ? { searchWords: searchWords(next) } : {}),
 			version: row.version + 1,
 			changedAt: ctx.now
 		})

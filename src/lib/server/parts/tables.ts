@@ -49,7 +49,7 @@ export const part = pgTable(
 		outCents: integer('out_cents'),
 		scrapReason: text('scrap_reason'),
 		destroyed: boolean('destroyed').notNull().default(false),
-		searchText: text('search_text').notNull().default(''),
+		searchWords: text('search_words').notNull().default(''),
 		pulledAt: time('pulled_at').notNull(),
 		changedAt: time('changed_at').notNull(),
 		version: integer('version').notNull().default(1)
@@ -58,10 +58,10 @@ export const part = pgTable(
 		primaryKey({ columns: [t.shopId, t.id] }),
 		unique('part_tag').on(t.shopId, t.tag),
 		index('part_kind').on(t.shopId, t.kind, t.state),
+		index('part_engine').on(t.shopId, t.kind, t.engineKey),
 		index('part_donor').on(t.shopId, t.donorId),
 		index('part_bin').on(t.shopId, t.binId),
 		index('part_numbers').using('gin', t.numberKeys),
-		index('part_search').using('gin', sql`${t.searchText} gin_trgm_ops`),
 		foreignKey({ columns: [t.shopId, t.tag], foreignColumns: [tag.shopId, tag.code] }),
 		foreignKey({ columns: [t.shopId, t.donorId], foreignColumns: [donor.shopId, donor.id] }),
 		foreignKey({ columns: [t.shopId, t.binId], foreignColumns: [bin.shopId, bin.id] }),
@@ -110,6 +110,39 @@ export const partPhoto = pgTable(
 	(t) => [
 		primaryKey({ columns: [t.shopId, t.partId, t.photoId] }),
 		foreignKey({ columns: [t.shopId, t.partId], foreignColumns: [part.shopId, part.id] }),
-		foreignKey({ columns: [t.shopId, t.photoId], foreignColumns: [photo.shopId, photo.id] })
+		foreignKey({
+			columns: [t.shopId, t.photoId],
+			foreignColumns: [photo.shopId, photo.id]
+		}).onDelete('cascade')
+	]
+);
+
+/** Somebody tried a part of a kind, off one engine, on another: it fits, or it does not and why. */
+export const fit = pgTable(
+	'fit',
+	{
+		shopId: shopColumn().references(() => shop.id),
+		id: idColumn(),
+		partId: refColumn('part_id').notNull(),
+		kind: text('kind').notNull(),
+		/** The engine that the part is from. */
+		fromKey: text('from_key').notNull(),
+		/** The engine it was tried on. */
+		engine: text('engine').notNull(),
+		engineKey: text('engine_key').notNull(),
+		fits: boolean('fits').notNull(),
+		because: text('because').notNull().default(''),
+		bothWays: boolean('both_ways').notNull(),
+		memberId: refColumn('member_id').notNull(),
+		at: time('at').notNull()
+	},
+	(t) => [
+		primaryKey({ columns: [t.shopId, t.id] }),
+		index('fit_kind').on(t.shopId, t.kind),
+		index('fit_part').on(t.shopId, t.partId),
+		foreignKey({ columns: [t.shopId, t.partId], foreignColumns: [part.shopId, part.id] }),
+		foreignKey({ columns: [t.shopId, t.memberId], foreignColumns: [member.shopId, member.id] }),
+		check('fit_engine', sql`${t.engineKey} <> ''`),
+		check('fit_because', sql`${t.fits} or ${t.because} <> ''`)
 	]
 );

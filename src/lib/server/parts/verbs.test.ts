@@ -222,10 +222,10 @@ describe('grading and editing', () => {
 		expect(await now()).toMatchObject({ numbers: ['TN-44 O1'], note: 'small chip', label: '' });
 		const { rows } = await ours.ctx.db.transaction(async (tx) => {
 			await tx.execute(`select set_config('endplay.shop', '${ours.ctx.shopId}', true)`);
-			return tx.execute(`select number_keys, search_text from part where tag = '${tag}'`);
+			return tx.execute(`select number_keys, search_words from part where tag = '${tag}'`);
 		});
 		expect(rows[0]).toMatchObject({ number_keys: ['TN4401'] });
-		expect(rows[0]!.search_text).toContain('small chip');
+		expect(rows[0]!.search_words).toContain('small chip');
 	});
 });
 

@@ -81,17 +81,18 @@ export async function answerForm<R>(
 	return done as Kept<R>;
 }
 
-/** A form's action, done once per key. */
+/** A form's action, done once per key; `kept` as `once` takes it. */
 export function action<S extends z.ZodType, R, E extends Event>(
 	ability: Ability,
 	schema: S,
-	verb: (ctx: Context, input: z.output<S>, event: E) => Promise<R>
+	verb: (ctx: Context, input: z.output<S>, event: E) => Promise<R>,
+	kept?: (done: R) => unknown
 ) {
 	return (event: E) =>
 		answerForm(event, async (form, fields) => {
 			const ctx = contextFor(event, ability);
 			const { key, hash } = formKey(event, form);
 			const input = schema.parse(fields);
-			return once(ctx, key, hash, (ctx) => verb(ctx, input, event));
+			return once(ctx, key, hash, (ctx) => verb(ctx, input, event), kept);
 		});
 }

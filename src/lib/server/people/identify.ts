@@ -35,5 +35,6 @@ async function identifyPerson(event: RequestEvent): Promise<void> {
 
 async function identifyKey(event: RequestEvent, key: string): Promise<void> {
 	const holder = await keyHolder(db(), key);
-	if (holder && holder.slug === event.params.shop?.toLowerCase()) event.locals.ctx = contextOf(holder);
+	if (holder && holder.slug === event.params.shop?.toLowerCase())
+		event.locals.ctx = contextOf(holder);
 }

@@ -29,13 +29,15 @@ export const wasAnswered = (ctx: Context, key: string, bodyHash: string): Promis
 
 /**
  * Does a change once per key, in the same transaction as the change itself: the same key and body again
- * gets the first answer, another body under the same key is refused.
+ * gets the first answer, another body under the same key is refused. `kept` says what a repeat is told, where
+ * the answer itself must not be kept.
  */
 export const once = <T>(
 	ctx: Context,
 	key: string,
 	bodyHash: string,
-	work: (ctx: Context) => Promise<T>
+	work: (ctx: Context) => Promise<T>,
+	kept: (answer: T) => unknown = (answer) => answer
 ): Promise<T> =>
 	inShop(ctx, async (tx, ctx) => {
 		const [first] = await tx
@@ -47,7 +49,7 @@ export const once = <T>(
 		const answer = await work(ctx);
 		await tx
 			.update(answered)
-			.set({ answer: answer ?? null })
+			.set({ answer: kept(answer) ?? null })
 			.where(mine(ctx, key));
 		return answer;
 	});

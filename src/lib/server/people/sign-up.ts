@@ -4,21 +4,20 @@ import type { Db, Tx } from '../db';
 import { addPerson } from './persons';
 import { event, member, shop } from './tables';
 
-const slugOf = (name: string) =>
-	name
+/** First words of addresses that are no shop. */
+const OURS = ['api', 'auth', 'choose-shop', 'invite', 'livez', 'readyz', 'reset', 't', 'theme'];
+
+function slugOf(name: string): string {
+	const slug = name
 		.normalize('NFKD')
 		.toLowerCase()
 		.replace(/[^a-z0-9]+/g, '-')
 		.replace(/^-|-$/g, '')
-		.slice(0, 40) || 'shop';
-
-async function freeSlug(tx: Tx, name: string): Promise<string> {
-	const wanted = slugOf(name);
-	for (let n = 1; ; n++) {
-		const slug = n === 1 ? wanted : `${wanted}-${n}`;
-		const { rows } = await tx.execute<{ taken: boolean }>(sql`select slug_taken(${slug}) as taken`);
-		if (!rows[0]!.taken) return slug;
-	}
+		.slice(0, 40)
+		.replace(/-$/, '');
+	return slug === '' || OURS.includes(slug) || slug.startsWith('sign-')
+		? `${slug || 'the'}-shop`
+		: slug;
 }
 
 export interface NewShop {
@@ -28,6 +27,32 @@ export interface NewShop {
 	units: 'inch' | 'mm';
 }
 
+/** The row of a new shop under the first of its slugs that is free, with its row policies set. */
+async function addShop(tx: Tx, input: NewShop & { slug?: string }, now: Date) {
+	const { rows } = await tx.execute<{ id: string }>(
+		sql`select nextval(pg_get_serial_sequence('shop', 'id')) as id`
+	);
+	const id = Number(rows[0]!.id);
+	await tx.execute(sql`select set_config('endplay.shop', ${String(id)}, true)`);
+	const { shopName: name, currency, timeZone, units } = input;
+	const wanted = input.slug ?? slugOf(name);
+	for (let n = 1; ; n++) {
+		const slug = n === 1 ? wanted : `${wanted}-${n}`;
+		const row = {
+			id,
+			slug,
+			name,
+			currency,
+			timeZone,
+			units,
+			season: 'normal',
+			createdAt: now
+		} as const;
+		const [made] = await tx.insert(shop).values(row).onConflictDoNothing().returning();
+		if (made) return { shopId: id, slug };
+	}
+}
+
 /** Opens a shop with its owner. */
 export async function openShop(
 	tx: Tx,
@@ -35,23 +60,7 @@ export async function openShop(
 	owner: { personId: string; name: string },
 	now: Date
 ): Promise<{ shopId: number; slug: string; memberId: number }> {
-	const slug = input.slug ?? (await freeSlug(tx, input.shopName));
-	const { rows } = await tx.execute<{ id: string }>(
-		sql`select nextval(pg_get_serial_sequence('shop', 'id')) as id`
-	);
-	const shopId = Number(rows[0]!.id);
-	await tx.execute(sql`select set_config('endplay.shop', ${String(shopId)}, true)`);
-	const { currency, timeZone, units } = input;
-	await tx.insert(shop).values({
-		id: shopId,
-		slug,
-		name: input.shopName,
-		currency,
-		timeZone,
-		units,
-		season: 'normal',
-		createdAt: now
-	});
+	const { shopId, slug } = await addShop(tx, input, now);
 	const [row] = await tx
 		.insert(member)
 		.values({ shopId, personId: owner.personId, name: owner.name, role: 'owner', joinedAt: now })

@@ -22,6 +22,9 @@ const THUMBS = [
 	{ side: 96, quality: 10 }
 ];
 
+// Uploads differ, so what the last one left is only memory held.
+sharp.cache(false);
+
 /** A decoded picture may take a quarter of a gigabyte, so no more than two at a time. */
 const turn = turns(2);
 
@@ -63,16 +66,17 @@ async function thumbOf(card: Buffer): Promise<Buffer> {
 	return thumb;
 }
 
-/** One decode; upright, in plain colours, without a byte of what the camera wrote beside the picture. */
+/**
+ * One decode of the upload; upright, in plain colours, without a byte of what the camera wrote beside the
+ * picture. The smaller sizes come from the larger, so that no raw picture waits in memory.
+ */
 async function draw(bytes: Buffer): Promise<CleanPhoto> {
-	const { data, info } = await open(bytes)
+	const { data: full, info } = await open(bytes)
 		.autoOrient()
 		.resize(FULL, FULL, { fit: 'inside', withoutEnlargement: true })
-		.raw()
+		.webp({ quality: 80 })
 		.toBuffer({ resolveWithObject: true });
-	const raw = { width: info.width, height: info.height, channels: info.channels };
-	const full = await sharp(data, { raw }).webp({ quality: 80 }).toBuffer();
-	const card = await sharp(data, { raw })
+	const card = await sharp(full)
 		.resize(CARD, CARD, { fit: 'inside', withoutEnlargement: true })
 		.webp({ quality: 75 })
 		.toBuffer();

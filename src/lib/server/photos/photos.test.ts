@@ -4,11 +4,12 @@ import { NotFound, Refused } from '$lib/refusal';
 import { randomBytes } from 'node:crypto';
 import { buffer } from 'node:stream/consumers';
 import { deflateSync } from 'node:zlib';
-import { eq } from 'drizzle-orm';
+import { and, eq } from 'drizzle-orm';
 import sharp from 'sharp';
 import { beforeAll, describe, expect, it } from 'vitest';
-import { testShops, type TestShop } from '../db/test-shop';
+import { NOON, testShops, type TestShop } from '../db/test-shop';
 import { inShop } from '../context';
+import { addDonorPhoto, takeIn } from '../donors';
 import { listKeys } from '../storage';
 import { cleanPhoto, deletePhoto, keepPhoto, readPhoto, restorePhoto, savePhoto } from '.';
 import { sweepPhotos } from './sweep';
@@ -134,6 +135,21 @@ describe('a photo', () => {
 		expect(data[data.length - 3]).toBeLessThan(200);
 	});
 
+	it.each([1, 2, 3, 4, 5, 6, 7, 8])('is upright from way %i of holding the camera', async (way) => {
+		const corner = await plain(20, 12).png().toBuffer();
+		const sent = await sharp({ create: { width: 96, height: 64, channels: 3, background: '#fff' } })
+			.composite([{ input: corner, left: 0, top: 0 }])
+			.withMetadata({ orientation: way })
+			.png()
+			.toBuffer();
+		const small = (bytes: Buffer) =>
+			sharp(bytes).resize(24, 24, { fit: 'fill' }).grayscale().raw().toBuffer();
+		const wanted = await small(await sharp(sent).autoOrient().png().toBuffer());
+		const seen = await small((await cleanPhoto(sent)).sizes.full);
+		const off = seen.reduce((most, value, at) => Math.max(most, Math.abs(value - wanted[at]!)), 0);
+		expect(off).toBeLessThan(40);
+	});
+
 	it('has sizes for screens, the smallest under 15 KB even of noise', async () => {
 		const { sizes } = await cleanPhoto(await noise(3000, 2000).jpeg({ quality: 60 }).toBuffer());
 		const widest = async (bytes: Buffer) => (await sharp(bytes).metadata()).width;
@@ -165,6 +181,13 @@ describe('in the store', () => {
 		for await (const { key } of listKeys(`${shop.ctx.shopId}/`)) keys.push(key);
 		return keys;
 	};
+	const rowOf = (id: number) =>
+		inShop(ours.ctx, (tx) =>
+			tx
+				.select()
+				.from(photo)
+				.where(and(eq(photo.shopId, ours.ctx.shopId), eq(photo.id, id)))
+		);
 	const picture = () => plain(900, 600).jpeg().toBuffer();
 
 	it('three sizes stand under a fresh key, never the upload itself', async () => {
@@ -203,6 +226,21 @@ describe('in the store', () => {
 	it('is never written to inside a transaction', async () => {
 		const sent = await picture();
 		await expect(inShop(ours.ctx, (_tx, ctx) => keepPhoto(ctx, sent))).rejects.toThrow(/before/);
+	});
+
+	it('one that was taken away thirty days ago is gone, row, ties and bytes', async () => {
+		const { number } = await takeIn(ours.ctx, { model: 'TARN-21L' });
+		const { id } = await addDonorPhoto(ours.ctx, number, await picture(), 'front');
+		await deletePhoto(ours.ctx, id);
+		const [row] = await rowOf(id);
+		const after = (days: number) => ours.at(new Date(NOON.getTime() + days * 86_400_000));
+		await sweepPhotos(after(29));
+		expect(await rowOf(id)).toHaveLength(1);
+		await sweepPhotos(after(31));
+		expect(await rowOf(id)).toHaveLength(0);
+		await sweepPhotos({ ...ours.ctx, now: new Date(Date.now() + 61 * 60_000) });
+		expect((await keysOf(ours)).some((key) => key.startsWith(row!.key))).toBe(false);
+		await expect(restorePhoto(ours.ctx, id)).rejects.toThrow(NotFound);
 	});
 
 	it('the sweep removes what has no row after an hour, and nothing else', async () => {

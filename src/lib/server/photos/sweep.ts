@@ -1,4 +1,4 @@
-import { and, eq, inArray } from 'drizzle-orm';
+import { and, eq, inArray, lt } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import { listKeys, removeKeys } from '../storage';
 import { shopPrefix } from './keep';
@@ -21,8 +21,21 @@ const withoutRow = (ctx: Context, stored: string[]): Promise<string[]> =>
 		return stored.filter((key) => !known.has(photoKey(key)));
 	});
 
-/** Removes what was put into the store of one shop and got no row within the hour. Returns how many. */
+/** A photo that was taken away can be put back for so long. */
+const KEPT_DAYS = 30;
+
+const forgetDeleted = (ctx: Context): Promise<unknown> =>
+	inShop(ctx, (tx) => {
+		const before = new Date(ctx.now.getTime() - KEPT_DAYS * 86_400_000);
+		return tx.delete(photo).where(and(eq(photo.shopId, ctx.shopId), lt(photo.deletedAt, before)));
+	});
+
+/**
+ * Removes the rows of one shop's photos that were taken away long ago, then from the store what has no row
+ * an hour after it was put there. Returns how many keys.
+ */
 export async function sweepPhotos(ctx: Context): Promise<number> {
+	await forgetDeleted(ctx);
 	const before = ctx.now.getTime() - GRACE_MS;
 	const old: string[] = [];
 	for await (const { key, changedAt } of listKeys(shopPrefix(ctx.shopId)))

@@ -10,11 +10,12 @@ export const nextAfter = (value: string | number, id: number): string =>
 	Buffer.from(JSON.stringify([String(value), id])).toString('base64url');
 
 /** Reads a cursor; one that was not given out by the list is refused. */
-export function placeAfter(cursor: string | undefined): PlaceAfter | null {
+export function placeAfter(cursor: string | undefined, as: 'text' | 'bigint'): PlaceAfter | null {
 	if (!cursor) return null;
 	try {
 		const [value, id] = JSON.parse(Buffer.from(cursor, 'base64url').toString()) as unknown[];
-		if (typeof value === 'string' && Number.isSafeInteger(id)) return { value, id: id as number };
+		const fits = typeof value === 'string' && (as === 'text' || /^-?\d{1,15}$/.test(value));
+		if (fits && Number.isSafeInteger(id)) return { value, id: id as number };
 	} catch {
 		// falls through to the refusal
 	}

@@ -39,10 +39,10 @@ export const listPrices = (
 	inShop(ctx, async (tx, ctx) => {
 		const { staleDays } = await getPolicy(ctx);
 		const { sort = 'kind', down = false } = filter;
-		const limit = Math.min(Math.max(filter.limit ?? 50, 1), 200);
+		const limit = Math.min(Math.max(Math.floor(filter.limit ?? 50), 1), 200);
 		const { of, as } = SORTED_BY[sort];
 		const where = matching(ctx, filter, staleDays);
-		const after = placeAfter(filter.cursor);
+		const after = placeAfter(filter.cursor, as);
 		const beyond = after
 			? sql`(${of}, ${price.id}) ${down ? sql`<` : sql`>`} (${after.value}::${sql.raw(as)}, ${after.id}::bigint)`
 			: undefined;

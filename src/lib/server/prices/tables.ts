@@ -1,7 +1,9 @@
 import { sql } from 'drizzle-orm';
 import {
+	boolean,
 	check,
 	date,
+	foreignKey,
 	index,
 	integer,
 	pgTable,
@@ -9,8 +11,8 @@ import {
 	text,
 	uniqueIndex
 } from 'drizzle-orm/pg-core';
-import { idColumn, shopColumn, time } from '../db/columns';
-import { shop } from '../people/tables';
+import { idColumn, refColumn, shopColumn, time } from '../db/columns';
+import { member, shop } from '../people/tables';
 
 /** What a new part costs: for a number, or for a kind on an engine. Money is in the shop's currency. */
 export const price = pgTable(
@@ -37,5 +39,29 @@ export const price = pgTable(
 		check('price_new', sql`${t.newCents} > 0`),
 		check('price_copy', sql`${t.copyCents} > 0`),
 		check('price_for', sql`${t.engineKey} <> '' or ${t.numberKey} <> ''`)
+	]
+);
+
+/** One number is replaced by another. The new one serves for the old; the old for the new only both ways. */
+export const supersession = pgTable(
+	'supersession',
+	{
+		shopId: shopColumn().references(() => shop.id),
+		id: idColumn(),
+		oldNumber: text('old_number').notNull(),
+		oldKey: text('old_key').notNull(),
+		newNumber: text('new_number').notNull(),
+		newKey: text('new_key').notNull(),
+		bothWays: boolean('both_ways').notNull().default(false),
+		note: text('note').notNull().default(''),
+		memberId: refColumn('member_id').notNull(),
+		at: time('at').notNull()
+	},
+	(t) => [
+		primaryKey({ columns: [t.shopId, t.id] }),
+		uniqueIndex('supersession_of').on(t.shopId, t.oldKey, t.newKey),
+		index('supersession_new').on(t.shopId, t.newKey),
+		foreignKey({ columns: [t.shopId, t.memberId], foreignColumns: [member.shopId, member.id] }),
+		check('supersession_keys', sql`${t.oldKey} <> '' and ${t.newKey} <> '' and ${t.oldKey} <> ${t.newKey}`)
 	]
 );

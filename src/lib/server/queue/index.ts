@@ -39,5 +39,6 @@ export async function stopQueue(): Promise<void> {
 
 const quiet = () =>
 	new Logger(() => (level, message) => {
-		if (level === 'error' || level === 'warning') log().warn({ message: unnamed(message) }, 'queue');
+		if (level === 'error' || level === 'warning')
+			log().warn({ message: unnamed(message) }, 'queue');
 	});

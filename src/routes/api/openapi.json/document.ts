@@ -20,7 +20,8 @@ const PARAMS: Record<string, string> = {
 	tag: 'Any tag, as typed',
 	id: 'Id of the photo',
 	size: 'thumb, card or full',
-	call: 'usedPrice, gain or keepCleaning'
+	call:
+		'usedPrice, gain, keepCleaning, pullPlan, decide, allocate, carry, learnChance, learnRate or learnShare'
 };
 
 const idempotency = z.object({

@@ -1,4 +1,6 @@
 import { z, type Row } from './row';
+import { donorAnswers, donorFigures } from './worth-donor';
+import { learnAnswer, learnFigures } from './worth-learn';
 
 const amount = z.number().min(0);
 const share = z.number().min(0).max(1);
@@ -35,7 +37,8 @@ const Gain = z
 		labour: amount,
 		minutesNow: amount,
 		minutesLater: amount,
-		waiting: share.nullish()
+		waiting: share.nullish(),
+		workWhenCalledOnly: z.boolean().nullish()
 	})
 	.openapi('GainFigures');
 
@@ -62,16 +65,18 @@ const Answer = z.union([
 		gainPerMinute: z.number().nullable(),
 		terms: z.record(z.string(), z.number().nullable())
 	}),
-	z.object({ go: z.boolean(), inHandCents: z.int(), stopAfter: z.int().nullable() })
+	z.object({ go: z.boolean(), inHandCents: z.int(), stopAfter: z.int().nullable() }),
+	...donorAnswers,
+	learnAnswer
 ]);
 
 export const worth: Row[] = [
 	{
 		method: 'post',
 		path: '/worth/{call}',
-		said: 'The calculator: usedPrice, gain or keepCleaning; nothing is kept',
+		said: 'The calculator, one calculation a call; nothing is kept',
 		may: 'see',
-		body: z.union([UsedPrice, Gain, KeepCleaning]),
+		body: z.union([UsedPrice, Gain, KeepCleaning, ...donorFigures, ...learnFigures]),
 		gives: Answer,
 		changesNothing: true
 	}

@@ -1,6 +1,7 @@
 import { db } from '../../db';
 import { env } from '../../env';
 import { sendLetter } from '../../mail';
+import { mayWriteTo } from '../letter-limit';
 import { knowsEmail } from '../sign-in';
 
 /** The link opens on our own address, whatever host the request named. */
@@ -24,8 +25,9 @@ If that was you, the shop's owner can invite you, or you can open a shop of your
 ${env().ORIGIN}/sign-up
 `;
 
-/** The same answer on the screen for every address; only the letter knows the difference. */
+/** The same answer on the screen for every address and however often; only the letters know the difference. */
 export async function sendSignInLetter(to: string, url: string): Promise<void> {
+	if (!(await mayWriteTo(db(), to.trim().toLowerCase(), new Date()))) return;
 	const text = (await knowsEmail(db(), to)) ? known(ownLink(url)) : unknown();
 	await sendLetter({ to, subject: 'Sign in to Endplay', text });
 }

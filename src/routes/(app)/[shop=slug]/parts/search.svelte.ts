@@ -11,7 +11,8 @@ interface Given {
 }
 
 async function ask(slug: string, search: string, signal: AbortSignal): Promise<Found> {
-	const answer = await fetch(`/api/${slug}/parts?${search}`, { signal });
+	const together = /(^|&)(view=table|same=)/.test(search) ? 'no' : 'yes';
+	const answer = await fetch(`/api/${slug}/parts?${search}&together=${together}`, { signal });
 	if (!answer.ok) throw new Error(`${answer.status}`);
 	return answer.json();
 }

@@ -36,7 +36,8 @@ export const actions = {
 		await editMember(ctx, input);
 		return back('Changed');
 	}),
-	key: action('run', KeyInput, (ctx, input) => addKey(ctx, input)),
+	// The key itself is shown once and kept nowhere, not even for the same form sent again.
+	key: action('run', KeyInput, addKey, () => ({ key: null })),
 	revoke: action('run', RowInput, async (ctx, { id }) => {
 		await revokeKey(ctx, id);
 		return back('Key switched off');

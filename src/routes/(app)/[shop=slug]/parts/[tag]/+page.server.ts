@@ -1,5 +1,5 @@
 import { Nothing } from '$lib/parts/input';
-import { whyNot, type Move } from '$lib/parts/state';
+import { MOVES, whyNot, type Move } from '$lib/parts/state';
 import type { PartView } from '$lib/parts/view';
 import { foundPart, freePart, getPart, hangPhoto, missPart } from '$lib/server/parts';
 import { action, page } from '$lib/server/people';
@@ -9,17 +9,8 @@ import { plural } from '$lib/format';
 import { after } from './sheet';
 import type { PageServerLoadEvent, RequestEvent } from './$types';
 
-const ASKED: Move[] = [
-	'move',
-	'hold',
-	'free',
-	'fit',
-	'take back',
-	'scrap',
-	'prove',
-	'miss',
-	'find'
-];
+const OTHERWISE = ['pull', 'grade', 'edit', 'photo', 'sell'];
+const ASKED = (Object.keys(MOVES) as Move[]).filter((move) => !OTHERWISE.includes(move));
 
 export const load = page('see', async (ctx, { params }: PageServerLoadEvent) => {
 	const part = await getPart(ctx, params.tag);

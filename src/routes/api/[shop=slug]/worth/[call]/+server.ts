@@ -1,12 +1,31 @@
 import { NotFound, Refused } from '$lib/refusal';
 import { read } from '$lib/server/people';
-import { gain, keepCleaning, usedPrice, WorthError } from '$lib/worth';
+import {
+	allocate,
+	carry,
+	decide,
+	gain,
+	keepCleaning,
+	learnChance,
+	learnRate,
+	learnShare,
+	pullPlan,
+	usedPrice,
+	WorthError
+} from '$lib/worth';
 import type { RequestEvent } from './$types';
 
 const calls: Record<string, ((input: never) => object) | undefined> = {
 	usedPrice,
 	gain,
-	keepCleaning
+	keepCleaning,
+	pullPlan,
+	decide,
+	allocate,
+	carry,
+	learnChance,
+	learnRate,
+	learnShare
 };
 
 async function sentFigures(request: Request): Promise<never> {

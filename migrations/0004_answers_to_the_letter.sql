@@ -1,0 +1,1 @@
+ALTER TABLE "answered" ALTER COLUMN "answer" SET DATA TYPE json;

@@ -1,0 +1,1 @@
+ALTER TABLE "part" DROP COLUMN "search_text";

@@ -1,0 +1,85 @@
+import type { PartState, Grade, ProofWay } from '$lib/parts/words';
+import type { Season } from '$lib/people/settings';
+import type { Sureness } from '$lib/donors/words';
+import type { Policy } from '$lib/people/policy';
+
+/** A part as the database's own search gives it. */
+export interface FoundPart {
+	id: number;
+	tag: string;
+	kind: string;
+	label: string;
+	grade: Grade;
+	state: PartState;
+	bin: string | null;
+	box: number | null;
+	donor: number | null;
+	maker: string | null;
+	model: string | null;
+	engine: string;
+	engineKey: string;
+	serial: string | null;
+	typeCode: string | null;
+	cc: number | null;
+	cause: string | null;
+	secondCause: string | null;
+	sureness: Sureness | null;
+	takenInAt: string | null;
+	numbers: string[];
+	note: string;
+	mass: number | null;
+	heldFor: string | null;
+	heldUntil: string | null;
+	outAs: 'fitted' | 'sold' | null;
+	outTo: string | null;
+	changedAt: string;
+	pulledAt: string;
+	binCost: number | null;
+	binLitres: number | null;
+	asked: number | null;
+	photo: number | null;
+	proofs: { how: ProofWay; passed: boolean }[] | null;
+	price: { newCents: number; copyCents: number | null; source: string; seenOn: string } | null;
+	/** How many others would answer the same call, and how many of them go first. */
+	queue: [number, number];
+	stands: boolean;
+}
+
+export interface Hit {
+	at: [string, string];
+	tier: number;
+	fits: boolean | null;
+	same: string;
+	count: number;
+	part: FoundPart;
+}
+
+interface Counted {
+	value: number | string;
+	count: number;
+	said?: string;
+}
+
+export type Counts = Record<
+	'kind' | 'grade' | 'state' | 'proof' | 'price' | 'bin' | 'engine',
+	Counted[] | null
+>;
+
+export interface Answer extends Counts {
+	/** 1 to the letter, 2 spelling forgiven, 3 some words left out. */
+	level: 1 | 2 | 3;
+	total: number;
+	page: Hit[] | null;
+	gone: Hit[] | null;
+	shop: { slug: string; season: Season; timeZone: string; figures: Partial<Policy> | null };
+}
+
+/** How near a hit is: 0 a tag to 15, known not to fit. The numbers of the search function. */
+export const TIER = {
+	tag: 0,
+	number: 1,
+	superseded: 2,
+	numberPiece: 5,
+	serial: 6,
+	nearTag: 10
+} as const;

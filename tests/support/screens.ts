@@ -1,0 +1,85 @@
+import type { Page } from '@playwright/test';
+
+/** What the demo shop has to show of each sort of page. */
+export interface Shown {
+	part: string;
+	held: string;
+	out: string;
+	scrapped: string;
+	bare: string;
+	donor: string;
+	whole: string;
+	bench: string;
+	bin: string;
+	price: string;
+}
+
+interface Item {
+	tag: string;
+	kind: string;
+	bin: string | null;
+	photo: string | null;
+}
+
+const SHOP = '/osiergate';
+/** Kinds that anybody may buy. */
+const PLAIN = ['coil', 'muffler', 'recoil', 'starter12', 'stator', 'carb-float'];
+
+/** Looks for one of each in the shop as it stands, whatever was done to it before. */
+export async function findShown(page: Page): Promise<Shown> {
+	const parts = async (state: string) => {
+		const answer = await page.request.get(`/api${SHOP}/parts?state=${state}&limit=100`);
+		const { items }: { items: Item[] } = await answer.json();
+		return items;
+	};
+	const donors = async (state: string) => {
+		await page.goto(`${SHOP}/donors?state=${encodeURIComponent(state)}`);
+		const newest = page.locator('a.tag-link').first();
+		return (await newest.getAttribute('href'))?.split('/').at(-1) ?? '';
+	};
+	const shelved = (await parts('shelved')).filter(({ bin }) => bin);
+	await page.goto(`${SHOP}/prices`);
+	const price = await page.locator('.ledger tbody a').first().getAttribute('href');
+	const first = async (state: string) => (await parts(state))[0]?.tag ?? '';
+	return {
+		part: shelved.find(({ photo, kind }) => photo && PLAIN.includes(kind))?.tag ?? '',
+		bare: shelved.find(({ photo }) => !photo)?.tag ?? '',
+		bin: shelved[0]?.bin ?? '',
+		held: await first('held'),
+		out: await first('out'),
+		scrapped: await first('scrapped'),
+		donor: await donors('stripped'),
+		whole: await donors('whole'),
+		bench: await donors('on the bench'),
+		price: price?.split('/').at(-1) ?? ''
+	};
+}
+
+/** Every page of a shop, by its address. */
+export const pagesOf = (one: Shown): string[] =>
+	[
+		...['parts', 'parts?q=starter', 'parts?q=zzyzx', 'parts/new'],
+		...['parts/new?kind=recoil', `parts/${one.part}`, `parts/${one.bare}`, `parts/${one.held}`],
+		...[`parts/${one.out}`, `parts/${one.scrapped}`, `parts/${one.part}/edit`],
+		...['hold', 'move', 'use', 'prove', 'scrap'].map((verb) => `parts/${one.part}/${verb}`),
+		...[`parts/${one.out}/back`, 'donors', 'donors/new'],
+		...[`donors/${one.donor}`, `donors/${one.whole}`, `donors/${one.bench}`],
+		...[`donors/${one.bench}/log`, `donors/${one.bench}/log?kind=flywheel`],
+		...['bins', 'bins/new', `bins/${one.bin}`, 'prices', 'prices/new', `prices/${one.price}`],
+		...['people', 'people/shop', 'worth?kind=flywheel', 'undo', `tags/${one.part}`]
+	].map((path) => `${SHOP}/${path}`);
+
+/** The screens that are used with one gloved thumb, each with its one main action, if it has one. */
+export const phoneScreens = (one: Shown): { path: string; main: string | null }[] =>
+	(
+		[
+			['donors/new', 'Take in'],
+			[`donors/${one.bench}/log`, null],
+			[`donors/${one.bench}/log?kind=carb-float`, 'Kept'],
+			['parts?q=starter', null],
+			[`parts/${one.part}/hold`, 'Hold it'],
+			[`parts/${one.part}/move`, 'Move it'],
+			[`parts/${one.part}/use`, 'Sold'],
+			[`parts/${one.out}/back`, 'Take it back']
+		] as const
+	).map(([path, main]) => ({ path: `${SHOP}/${path}`, main }));

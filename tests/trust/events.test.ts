@@ -1,0 +1,34 @@
+import { eq } from 'drizzle-orm';
+import { beforeAll, expect, it } from 'vitest';
+import { inShop } from '../../src/lib/server/context';
+import { event } from '../../src/lib/server/people/tables';
+import { DOORS, type Refs } from '../support/doors';
+import { testShops, type TestShop } from '../support/shops';
+import { stock } from '../support/things';
+
+/** A picture in the store or a bare row is no change that anybody sees. */
+const NO_CHANGE = ['keepPhoto', 'savePhoto', 'addPhotoRow', 'listMembers', 'listInvites'];
+
+let ours: TestShop;
+let refs: Refs;
+beforeAll(async () => {
+	({ ours } = await testShops());
+	refs = await stock(ours);
+});
+
+const events = () => inShop(ours.ctx, (tx) => tx.$count(event, eq(event.shopId, ours.ctx.shopId)));
+
+it('every change that is done writes one event, one that is refused none', async () => {
+	const done: string[] = [];
+	for (const [name, door] of Object.entries(DOORS)) {
+		if (door.needs === 'see' || NO_CHANGE.includes(name)) continue;
+		const before = await events();
+		const ok = await door.call(ours.ctx, refs).then(
+			() => true,
+			() => false
+		);
+		expect(await events(), name).toBe(before + (ok ? 1 : 0));
+		if (ok) done.push(name);
+	}
+	expect(done.length).toBeGreaterThan(25);
+});
