@@ -267,9 +267,12 @@ begin
 	for one in select shop_id, array_agg(id) as ids from changed group by shop_id loop
 		perform follow_parts(one.shop_id, one.ids);
 		if tg_op = 'INSERT' then
-			insert into found_number (shop_id, key, part_id)
-			select p.shop_id, k, p.id from changed p, unnest(p.number_keys) k where p.shop_id = one.shop_id
+			insert into found_number (shop_id, key, part_id, kind, engine_key)
+			select p.shop_id, k, p.id, p.kind, p.engine_key from changed p, unnest(p.number_keys) k where p.shop_id = one.shop_id
 			on conflict do nothing;
+		else
+			update found_number n set kind = p.kind, engine_key = p.engine_key from changed p
+			where p.shop_id = one.shop_id and n.shop_id = p.shop_id and n.part_id = p.id and (n.kind, n.engine_key) <> (p.kind, p.engine_key);
 		end if;
 		perform follow_words(one.shop_id, one.ids);
 	end loop;
@@ -280,8 +283,8 @@ create function part_renumbered() returns trigger security definer set search_pa
 begin
 	if new.number_keys is distinct from old.number_keys then
 		delete from found_number where shop_id = new.shop_id and part_id = new.id and not key = any (new.number_keys);
-		insert into found_number (shop_id, key, part_id)
-		select new.shop_id, k, new.id from unnest(new.number_keys) k on conflict do nothing;
+		insert into found_number (shop_id, key, part_id, kind, engine_key)
+		select new.shop_id, k, new.id, new.kind, new.engine_key from unnest(new.number_keys) k on conflict do nothing;
 	end if;
 	return null;
 end $$;
@@ -439,6 +442,7 @@ declare
 	everything boolean;
 	own json;
 	policy float8[];
+	v_red bigint[];
 	v_ranks jsonb;
 	v_fits jsonb;
 	answer json;
@@ -450,6 +454,7 @@ policy := array[
 	coalesce((own->'shares'->>'core')::float8, ask.policy[5]), coalesce((own->>'copyCap')::float8, ask.policy[6]),
 	coalesce((own->>'stepLimitCents')::float8, ask.policy[7]), coalesce((own->>'stepLowCents')::float8, ask.policy[8]),
 	coalesce((own->>'stepHighCents')::float8, ask.policy[9])];
+v_red := array(select id from bin where shop_id = shop and red);
 if ask.place is not null then
 	v_bins := array(select b.id from bin b where b.shop_id = shop and (upper(b.address) = ask.place or upper(b.address) like ask.place || '-%'));
 	isword := cardinality(v_bins) = 0;
@@ -596,7 +601,7 @@ partly as materialized (
 weak as materialized (
 	select part_id from found_by where shop_id + 0 = shop and shop_words(shop_id, words) @@ p_weak
 ),
-base as materialized (
+base as not materialized (
 	select * from level1 union all select * from level2
 	union all
 	select 11, greatest(cardinality(p_each) - coalesce(s.n, 0), 0), w.* from wide w left join partly s on s.part_id = w.part_id
@@ -627,12 +632,12 @@ hits as materialized (
 	where f_same is null or b.same_no = f_same
 ),
 cells as materialized (
-	select kind, grade_no, stands, proof_no, ok_place, ok_engine, ok_price, asks_no, new_cents, copy_cents, count(*)::int as n,
+	select kind, grade_no, stands, proof_no, ok_place, ok_engine, ok_price, count(*)::int as n,
 		(f_kind is null or kind = f_kind) as ok_kind,
 		(f_grade is null or grade_no = f_grade) as ok_grade,
 		(case when f_stands is null then stands < 5 else stands = f_stands end) as ok_stands,
 		(proof_no between f_proof_low and f_proof_high) as ok_proof
-	from hits group by 1, 2, 3, 4, 5, 6, 7, 8, 9, 10
+	from hits group by 1, 2, 3, 4, 5, 6, 7
 ),
 answers as materialized (
 	select part_id, ord, same_no, tier, fits from hits
@@ -651,7 +656,7 @@ page as materialized (
 	from tops t join answers a on a.same_no = t.same_no and a.ord = t.ord order by t.ord, t.same_no, a.part_id)
 ),
 alike as materialized (
-	select same_no, count(*)::int as n from answers where not p_together and same_no > 0 and same_no in (select same_no from page) group by 1
+	select same_no, count(*)::int as n from answers where not p_together and same_no > 0 and (same_no in (select same_no from page)) is true group by 1
 ),
 gone as materialized (
 	select part_id, ord, part_id as id, tier, fits, same_no, 1 as n from hits
@@ -678,10 +683,12 @@ worded as materialized (
 			select 2 + (r.number_key <> '')::int, r.* from price r where r.shop_id = shop and r.kind = p.kind and r.engine_key = p.engine_key and p.engine_key <> ''
 			) x order by x.nearness, x.seen_on desc, x.id desc limit 1) end,
 		'queue', (select json_build_array(count(*), count(*) filter (where o.grade_no < f.grade_no or o.grade_no = f.grade_no and (o.aged, o.part_id) < (f.aged, f.part_id))) from (
-			select o.* from found_by o where o.shop_id = shop and o.kind = p.kind and o.engine_key = p.engine_key and p.engine_key <> '' and o.stands < 2
-			union
-			select o.* from found_number n join found_by o on o.shop_id = shop and o.part_id = n.part_id where n.shop_id = shop and n.key = any (p.number_keys) and o.kind = p.kind and o.stands < 2
-			) o left join bin ob on ob.shop_id = shop and ob.id = o.bin_id where o.part_id <> p.id and not coalesce(ob.red, false)),
+			select o.part_id, o.grade_no, o.aged, o.bin_id from found_by o
+			where o.shop_id = shop and o.engine_key = p.engine_key and o.kind = p.kind and o.stands < 2 and p.engine_key <> ''
+			union all
+			select distinct o.part_id, o.grade_no, o.aged, o.bin_id from found_number n join found_by o on o.shop_id = shop and o.part_id = n.part_id
+			where n.shop_id = shop and n.key = any (p.number_keys) and n.kind = p.kind and (n.engine_key <> p.engine_key or p.engine_key = '') and o.stands < 2
+			) o where o.part_id <> p.id and (v_red = '{}' or o.bin_id is null or not o.bin_id = any (v_red))),
 		'stands', f.stands < 2 and not coalesce(b.red, false))) as said
 	from shown h
 	join part p on p.shop_id = shop and p.id = h.part_id
@@ -700,7 +707,10 @@ select json_build_object(
 	'state', (select json_agg(x) from (select stands as value, sum(n) as count from cells where ok_place and ok_engine and ok_price and ok_kind and ok_grade and ok_proof group by 1 order by 2 desc, 1) x),
 	'proof', (select json_agg(x) from (select proof_no as value, sum(n) as count from cells where ok_place and ok_engine and ok_price and ok_kind and ok_grade and ok_stands group by 1 order by 1) x),
 	'price', (select json_agg(x) from (select width_bucket(asked, array[1000, 2500, 5000, 10000]) as value, sum(n) as count from (
-		select asked_cents(asks_no, new_cents, copy_cents, policy) as asked, sum(n) as n from cells where ok_place and ok_engine and ok_kind and ok_grade and ok_stands and ok_proof group by asks_no, new_cents, copy_cents) c group by 1 order by 1) x),
+		select asked_cents(asks_no, new_cents, copy_cents, policy) as asked, count(*) as n from hits
+		where ok_place and ok_engine and (f_kind is null or kind = f_kind) and (f_grade is null or grade_no = f_grade)
+			and (case when f_stands is null then stands < 5 else stands = f_stands end) and proof_no between f_proof_low and f_proof_high
+		group by asks_no, new_cents, copy_cents) c group by 1 order by 1) x),
 	'bin', (select json_agg(json_build_object('value', coalesce(b.address, 'box D' || d.number), 'count', c.n) order by c.n desc, b.address) from (
 		select bin_id, box_id, count(*) as n from hits
 		where ok_engine and ok_price and (f_kind is null or kind = f_kind) and (f_grade is null or grade_no = f_grade)

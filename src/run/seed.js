@@ -17,6 +17,7 @@ async function load() {
 	const { createServer } = await import('vite');
 	const vite = await createServer({
 		root,
+		cacheDir: join(root, 'node_modules', '.vite-seed'),
 		configFile: join(root, 'vite.config.ts'),
 		server: { middlewareMode: true, hmr: false, ws: false, watch: null },
 		appType: 'custom',

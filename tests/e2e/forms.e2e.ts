@@ -1,5 +1,5 @@
 import type { Page } from '@playwright/test';
-import { expect, signIn, test } from '../support/browser';
+import { expect, ready, signIn, test } from '../support/browser';
 import { findShown, type Shown } from '../support/screens';
 
 /** Words that blame, beg or leak. */
@@ -66,6 +66,8 @@ const answers = (page: Page, button: string) =>
 
 async function sendBadly(page: Page, { path, button, typed = {} }: Bad): Promise<void> {
 	await page.goto(path);
+	// The scripts set what is folded as they take over.
+	if ((await page.locator('details').count()) > 0) await ready(page);
 	await page.evaluate(() => {
 		for (const details of document.querySelectorAll('details')) details.open = true;
 	});

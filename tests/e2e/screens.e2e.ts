@@ -30,6 +30,7 @@ async function fits(page: Page): Promise<string[]> {
 		[1280, 800, 1]
 	] as const;
 	const found: string[] = [];
+	await unfold(page);
 	for (const [width, height, letters] of sizes) {
 		await page.setViewportSize({ width, height });
 		await page.evaluate((times) => {

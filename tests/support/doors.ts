@@ -5,7 +5,7 @@ import type { Ability } from '../../src/lib/people/role';
 import * as bins from '../../src/lib/server/bins';
 import type { Context } from '../../src/lib/server/context';
 import * as donors from '../../src/lib/server/donors';
-import { findParts } from '../../src/lib/server/find';
+import { exportParts, findParts } from '../../src/lib/server/find';
 import * as parts from '../../src/lib/server/parts';
 import * as people from '../../src/lib/server/people';
 import * as photos from '../../src/lib/server/photos';
@@ -50,6 +50,16 @@ const PRICE = {
 	seenOn: '2026-03-01'
 };
 const OLD = { kind: 'carb-float', grade: 'usable' as const };
+const CALCULATION = {
+	kind: 'carb-float',
+	cause: 'stale-fuel' as const,
+	grade: 'untested' as const,
+	newCents: 4000,
+	copyCents: null,
+	have: 0,
+	stillOn: false,
+	season: null
+};
 const SHOP = {
 	name: 'Ours',
 	currency: 'USD',
@@ -129,15 +139,28 @@ export const DOORS: Record<string, Door> = {
 		prices.editPrice(ctx, price, { ...PRICE, version: 1 })
 	),
 	removePrice: on('trade', (ctx, { price }) => prices.removePrice(ctx, price, 1)),
+	listReplaced: off('see', (ctx) => prices.listReplaced(ctx, ['TN 1'])),
+	replaceNumber: off('work', (ctx) =>
+		prices.replaceNumber(ctx, { number: 'TN 1', by: 'TN 2', ways: 'one', note: '' })
+	),
 	putBackPrice: on('trade', (ctx, { priceEvent }) => prices.putBackPrice(ctx, priceEvent)),
 	// parts
+	listFits: on('see', (ctx, { part }) => parts.listFits(ctx, part)),
+	noteFit: on('work', (ctx, { part }) =>
+		parts.noteFit(ctx, part, { engine: 'Pellwyn 9', fits: 'yes', because: '', ways: 'one' })
+	),
 	getPart: on('see', (ctx, { part }) => parts.getPart(ctx, part)),
+	firstPhotos: off('see', (ctx, { tag }) => parts.firstPhotos(ctx, [tag])),
 	partsByIds: off('see', (ctx, { partId }) => parts.partsByIds(ctx, [partId])),
 	partVerdicts: off('see', async (ctx, { partId }) => [
 		...(await parts.partVerdicts(ctx, [partId]))
 	]),
 	kindVerdicts: on('see', (ctx, { donorId }) => parts.kindVerdicts(ctx, donorId, ['carb-float'])),
 	kindsStillOn: on('see', (ctx, { donor }) => parts.kindsStillOn(ctx, donor)),
+	planFor: on('see', (ctx, { donor }) => parts.planFor(ctx, donor, 30)),
+	choicesFor: on('see', (ctx, { donor }) => parts.choicesFor(ctx, donor)),
+	whatItTaught: off('see costs', parts.whatItTaught),
+	workOut: off('see terms', (ctx) => parts.workOut(ctx, CALCULATION)),
 	countDonorParts: off('see', (ctx, { donorId }) => parts.countDonorParts(ctx, donorId)),
 	listDonorParts: off('see', (ctx, { donorId }) => parts.listDonorParts(ctx, donorId)),
 	binsFor: off('see', (ctx) => parts.binsFor(ctx, 'carb-float')),
@@ -166,6 +189,9 @@ export const DOORS: Record<string, Door> = {
 	takeBackPart: on('trade', (ctx, { part }) => parts.takeBackPart(ctx, part, { reason: 'leaks' })),
 	undoPart: on('work', (ctx, { partEvent }) => parts.undoPart(ctx, partEvent)),
 	// find
+	exportParts: off('see', (ctx) =>
+		new Response(exportParts(ctx, readQuestion(new URLSearchParams('q=carburetor')))).text()
+	),
 	findParts: off('see', (ctx) => findParts(ctx, readQuestion(new URLSearchParams('q=carburetor'))))
 };
 
@@ -176,7 +202,7 @@ const PIECES = [
 	...['fingerprint', 'once', 'wasAnswered', 'acceptInvite', 'findInvite', 'allShopIds', 'shopsOf'],
 	...['visitorAction', 'setPassword', 'openAnother', 'signUp', 'cleanPhoto', 'actionWithPhotos'],
 	...['changeWithPhoto', 'findPlace', 'redBin', 'donorRow', 'findBox', 'newestRelease'],
-	...['pullableDonor', 'pricesFor', 'expireHolds', 'chanceBy']
+	...['pullableDonor', 'pricesFor', 'expireHolds', 'chanceBy', 'recentFigures']
 ];
 
 /** Functions of the doors that stand in neither list. */

@@ -68,6 +68,7 @@ export const stickingOut = (page: Page): Promise<string[]> =>
 		});
 		const out = [...document.querySelectorAll('body *')].filter((element) => {
 			if (element.closest('.visually-hidden, .skip, svg, [hidden]')) return false;
+			if (!element.checkVisibility()) return false;
 			const box = element.getBoundingClientRect();
 			return box.width > 0 && box.right > root.clientWidth + 1.5;
 		});

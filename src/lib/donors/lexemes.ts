@@ -56,9 +56,7 @@ function tokenOf(said: string, found: Record<string, string | undefined>): Token
 	}
 	if (count && unit) {
 		// 270V may be a model too
-		return [
-			{ said, is: 'amount', lexeme: amount(figure(count), unit), pieces: [numberKey(said)] }
-		];
+		return [{ said, is: 'amount', lexeme: amount(figure(count), unit), pieces: [numberKey(said)] }];
 	}
 	const parts = (code ?? '').split(/[-–—./_]/).filter(Boolean);
 	if (!/\d/.test(code ?? ''))

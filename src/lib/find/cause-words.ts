@@ -1,7 +1,10 @@
 import type { CauseId } from '../trade';
 
 const CALLED: [RegExp, CauseId[]][] = [
-	[/\b(?:blown|blew)(?: up)?(?: (?:engine|motor|block))?\b/, ['thrown-rod', 'no-oil', 'broken-block', 'lean']],
+	[
+		/\b(?:blown|blew)(?: up)?(?: (?:engine|motor|block))?\b/,
+		['thrown-rod', 'no-oil', 'broken-block', 'lean']
+	],
 	[/\b(?:threw|thrown|throwed)(?: a)? rod\b|\bhole in (?:the )?block\b/, ['thrown-rod']],
 	[/\bseized?(?: up)?\b|\bsiezed\b|\blocked up\b/, ['no-oil', 'lean', 'water']],
 	[/\b(?:ran|run) (?:without|out of|low on) oil\b|\bno oil\b/, ['no-oil']],

@@ -13,8 +13,10 @@ export const STANDS: readonly PartState[] = [
 	'scrapped'
 ];
 
-export const gradeNo = (grade: string): number => GRADES.indexOf(grade as (typeof GRADES)[number]) + 1;
-export const standsNo = (state: string): number => STANDS.indexOf(state as (typeof PART_STATES)[number]);
+export const gradeNo = (grade: string): number =>
+	GRADES.indexOf(grade as (typeof GRADES)[number]) + 1;
+export const standsNo = (state: string): number =>
+	STANDS.indexOf(state as (typeof PART_STATES)[number]);
 
 /** From where to where the proofs lie that a filter means: 0 unproved, 1 look-over to 5 bench test hot. */
 export function proofRange(proof: ProofFilter): [number, number] {

@@ -12,7 +12,18 @@ export const PROOF_FILTERS = [...PROOFS, 'tested', 'unproved'] as const;
 export type ProofFilter = (typeof PROOF_FILTERS)[number];
 
 /** What a list of answers can be put in order by; fit is how well each answers. */
-export const SORTS = ['fit', 'kind', 'engine', 'bin', 'grade', 'state', 'asked', 'new', 'copy', 'age'] as const;
+export const SORTS = [
+	'fit',
+	'kind',
+	'engine',
+	'bin',
+	'grade',
+	'state',
+	'asked',
+	'new',
+	'copy',
+	'age'
+] as const;
 export type FindSort = (typeof SORTS)[number];
 
 /** What is asked for a part, in whole money: 10-25, -50, 100- or none. */

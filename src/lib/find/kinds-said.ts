@@ -29,7 +29,11 @@ function beginning(text: string): string[] {
 	const last = wordsOf(text).at(-1);
 	if (!last || /\d/.test(last)) return [];
 	return everyKind
-		.filter(({ id, name }) => wordsOf(name)[0]?.startsWith(last) || kindWords(id).some((word) => last.length > 1 && word.startsWith(last)))
+		.filter(
+			({ id, name }) =>
+				wordsOf(name)[0]?.startsWith(last) ||
+				kindWords(id).some((word) => last.length > 1 && word.startsWith(last))
+		)
 		.sort((a, b) => b.callsPerYear - a.callsPerYear)
 		.slice(0, 8)
 		.map(({ id }) => id);
@@ -38,6 +42,12 @@ function beginning(text: string): string[] {
 const holding = new Map<string, string[]>();
 for (const { id } of everyKind)
 	for (const word of kindWords(id)) holding.set(word, [...(holding.get(word) ?? []), id]);
+/** Names with a hyphen are also typed in one word. */
+for (const { id, name, alsoCalled } of everyKind)
+	for (const said of [name, ...alsoCalled].flatMap(
+		(one) => one.toLowerCase().match(/\p{L}+-\p{L}+/gu) ?? []
+	))
+		holding.set(said.replace('-', ''), [...(holding.get(said.replace('-', '')) ?? []), id]);
 const TRADE_WORDS = new WordList();
 TRADE_WORDS.add([...holding.keys()].filter((word) => /^\p{L}{3,}$/u.test(word)));
 
@@ -57,7 +67,8 @@ function partly(strong: readonly string[], words: Lexicon): string[] {
 function matched(text: string, words: Lexicon): { kinds: string[]; nearKinds: string[] } {
 	const matches = matchKinds(text);
 	const sure = matches.filter(isSure);
-	if (sure.length > 0) return { kinds: ids(sure), nearKinds: ids(matches.filter((one) => !isSure(one))) };
+	if (sure.length > 0)
+		return { kinds: ids(sure), nearKinds: ids(matches.filter((one) => !isSure(one))) };
 	const strong = wordsOf(text).filter((word) => !WEAK_WORDS.has(word) && !words.has(word));
 	const near = matchKinds(strong.join(' '));
 	if (near.length > 0) return { kinds: ids(near.slice(0, 1)), nearKinds: ids(near.slice(1)) };

@@ -40,7 +40,8 @@ export function asTags(text: string): { tag: string | null; near: string[] } {
 		.replace(/[\s\-_.]/g, '')
 		.replaceAll('O', '0')
 		.replace(/[IL]/g, '1');
-	if (Math.abs(typed.length - TAG_LENGTH) > 1 || /[^0-9A-Z]/.test(typed)) return { tag: null, near: [] };
+	if (Math.abs(typed.length - TAG_LENGTH) > 1 || /[^0-9A-Z]/.test(typed))
+		return { tag: null, near: [] };
 	const near = new Set('suggestion' in read && read.suggestion ? [read.suggestion] : []);
 	for (let at = 0; at <= typed.length; at += 1) {
 		const [before, after] = [typed.slice(0, at), typed.slice(at)];

@@ -49,7 +49,10 @@ const DONOR = /^d0*([1-9]\d{0,6})$/;
 const BIN = /^[a-z]{1,3}\d{1,2}(-\d{1,3})?$/;
 const MOST_WORDS = 8;
 /** Heard with a part, but it may stand in a note: it moves an answer up. */
-const COLOURS = 'red blue black white green yellow orange gray grey silver gold brown purple old big small'.split(' ');
+const COLOURS =
+	'red blue black white green yellow orange gray grey silver gold brown purple old big small'.split(
+		' '
+	);
 
 const tidy = (typed: string): string =>
 	plainFractions(typed.slice(0, 200))
@@ -90,7 +93,9 @@ const isWeak = ({ said, lexeme }: Token) => WEAK_WORDS.has(said) || WEAK_WORDS.h
 
 /** What names an engine: codes where there are any, else the words. */
 function engineOf(tokens: readonly Token[]): string[] {
-	const codes = tokens.filter(({ is, lexeme }) => is === 'code' && (lexeme.length > 3 || /[A-Z]/.test(lexeme)));
+	const codes = tokens.filter(
+		({ is, lexeme }) => is === 'code' && (lexeme.length > 3 || /[A-Z]/.test(lexeme))
+	);
 	const words = tokens.filter(({ is, lexeme }) => is === 'word' && lexeme.length > 2);
 	const naming = codes.length > 0 ? codes : words;
 	return naming.map(({ said }) => engineKey(said)).filter(Boolean);
@@ -117,7 +122,9 @@ export function readSearch(typed: string, words: Lexicon = NO_WORDS): Plan {
 	const { donor, bin } = place(piecesOf(rest), kinds, month !== null);
 	const { tag, near: nearTags } = asTags(text);
 	const doubtful = asDoubtful(text);
-	const all = tokensOf(rest).filter(({ said }) => said !== donor && said !== bin && !said.includes('?'));
+	const all = tokensOf(rest).filter(
+		({ said }) => said !== donor && said !== bin && !said.includes('?')
+	);
 	const left = all.filter((token) => !isWeak(token) && !saysKind(token)).slice(0, MOST_WORDS);
 	const last = all.at(-1);
 	const asNeed = (token: Token) => needOf(token, token === last, words);
@@ -137,7 +144,13 @@ export function readSearch(typed: string, words: Lexicon = NO_WORDS): Plan {
 		nearKinds,
 		ask,
 		needs: [...left.map(asNeed), ...around],
-		literally: [...all.filter((token) => !isWeak(token)).slice(0, MOST_WORDS).map(asNeed), ...around],
+		literally: [
+			...all
+				.filter((token) => !isWeak(token))
+				.slice(0, MOST_WORDS)
+				.map(asNeed),
+			...around
+		],
 		weak: all.map(({ lexeme }) => lexeme).filter((lexeme) => COLOURS.includes(lexeme)),
 		filters,
 		engine: engineOf(left),

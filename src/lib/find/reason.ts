@@ -18,7 +18,10 @@ export interface Reasonable {
 const MOST = 3;
 
 /** The part's own number that answers what was typed. */
-function numberReason({ numberKey: asked, doubtful }: Plan, { tier, numbers, serial }: Reasonable): string | null {
+function numberReason(
+	{ numberKey: asked, doubtful }: Plan,
+	{ tier, numbers, serial }: Reasonable
+): string | null {
 	if (tier === 6 && serial) return `serial ${serial}`;
 	const known = numbers.map((said) => ({ said, key: numberKey(said) }));
 	const same = known.find(({ key }) => key === asked);
@@ -38,13 +41,16 @@ function worded(plan: Plan, part: Reasonable): string[] {
 		);
 		if (found) return [found.said === said ? said : `${found.said} for ${said}`];
 		const cc = part.cc === null ? '' : `${Math.round(part.cc)}cc`;
-		return cc && near.includes(cc) && said !== cc ? [`${Math.round(part.cc ?? 0)} cc for ${said}`] : [];
+		return cc && near.includes(cc) && said !== cc
+			? [`${Math.round(part.cc ?? 0)} cc for ${said}`]
+			: [];
 	});
 }
 
 /** Why a part answers, in a few words; null where its kind and engine say it already. */
 export function reasonFor(plan: Plan, part: Reasonable): string | null {
-	const tried = part.fits === null ? null : part.fits ? 'tried there, fits' : 'tried there, does not fit';
+	const tried =
+		part.fits === null ? null : part.fits ? 'tried there, fits' : 'tried there, does not fit';
 	const tag = part.tier === 10 ? `tag ${part.tag}, one character off` : null;
 	const reasons = [tried, tag, numberReason(plan, part), ...worded(plan, part)].filter(Boolean);
 	return reasons.length === 0 ? null : [...new Set(reasons)].slice(0, MOST).join('; ');

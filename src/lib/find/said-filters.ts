@@ -11,8 +11,13 @@ export interface SaidFilters {
 
 const UNIT = String.raw`(?![\w.,]|\s?(?:cc|hp|mm|cm|in\b|inch|"|v\b|volt|amp|teeth|tooth|kw|minutes?|min\b))`;
 const AMOUNT = String.raw`\s?[$€£]?\s?(\d{1,5}(?:[.,]\d{1,2})?)` + UNIT;
-const UNDER = new RegExp(String.raw`(?:\b(?:under|below|less than|cheaper than|up to|max)|<)` + AMOUNT);
-const OVER = new RegExp(String.raw`(?:\b(?:over|above|more than|at least|from)|>)\s?[$€£]\s?(\d{1,5}(?:[.,]\d{1,2})?)` + UNIT);
+const UNDER = new RegExp(
+	String.raw`(?:\b(?:under|below|less than|cheaper than|up to|max)|<)` + AMOUNT
+);
+const OVER = new RegExp(
+	String.raw`(?:\b(?:over|above|more than|at least|from)|>)\s?[$€£]\s?(\d{1,5}(?:[.,]\d{1,2})?)` +
+		UNIT
+);
 
 const PROVED: [RegExp, ProofFilter][] = [
 	[/\bbench[- ]test(?:ed)? hot\b|\btested hot\b/, 'bench test hot'],

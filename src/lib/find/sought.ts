@@ -35,9 +35,18 @@ const allOf = (shopId: number, needs: readonly Need[], way: Way) =>
 	needs.map((need) => anyOf(shopId, need[way])).join('&');
 
 /** What was named with the rest of the words, or every word to the letter. */
-function either(shopId: number, plan: Plan, needs: readonly Need[], literally: readonly Need[], way: Way) {
+function either(
+	shopId: number,
+	plan: Plan,
+	needs: readonly Need[],
+	literally: readonly Need[],
+	way: Way
+) {
 	const kinds = plan.kinds.map((kind) => `#${kind}`);
-	const named = kinds.length > 0 ? [anyOf(shopId, kinds), ...needs.map((need) => anyOf(shopId, need[way]))] : [];
+	const named =
+		kinds.length > 0
+			? [anyOf(shopId, kinds), ...needs.map((need) => anyOf(shopId, need[way]))]
+			: [];
 	const ways = [named.join('&'), allOf(shopId, literally, way)].filter(Boolean);
 	return ways.length === 0 ? null : ways.map((one) => `(${one})`).join('|');
 }
@@ -53,12 +62,16 @@ export function soughtBy(shopId: number, plan: Plan): Sought {
 	return {
 		strict: kindsAlone || needs.length === 0 ? null : ask(needs, literally, 'exact'),
 		strictWord: withPlace.length === 0 ? null : ask(withPlace, [...literally, ...place], 'exact'),
-		loose: literally.length === 0 ? null : ask(needs.length > 0 ? needs : literally, literally, 'near'),
+		loose:
+			literally.length === 0 ? null : ask(needs.length > 0 ? needs : literally, literally, 'near'),
 		looseWord: withPlace.length === 0 ? null : ask(withPlace, [...literally, ...place], 'near'),
 		wide:
 			plan.kinds.length > 0 || needs.length === 0
 				? null
-				: anyOf(shopId, needs.flatMap((need) => need.near)),
+				: anyOf(
+						shopId,
+						needs.flatMap((need) => need.near)
+					),
 		each: withPlace.map((need) => anyOf(shopId, need.near)),
 		weak: plan.weak.length > 0 ? anyOf(shopId, plan.weak) : null
 	};

@@ -1,8 +1,10 @@
-import { FAMILY_FACTOR, type Policy } from '$lib/people/policy';
+import type { Policy } from '$lib/people/policy';
 import type { Season } from '$lib/people/settings';
 import { chanceGood, kind, scrapCentsPerGram, type ChanceGood, type Level } from '$lib/trade';
 import { usedPrice, yearlyToContinuous, type GainInput, type UsedPrice } from '$lib/worth';
 import { figuresOf } from './kind-figures';
+import { callsFor, chancesFor, comeBackFor, shareFor } from './learned';
+import type { ShopFigures } from './learned-view';
 import type { VerdictSubject } from './verdict-view';
 import type { Grade } from './words';
 
@@ -14,14 +16,14 @@ const GRADE_IF_PASSED: Record<Level, Grade> = {
 	ruined: 'core'
 };
 
-export const chanceOf = (subject: VerdictSubject, policy: Policy): ChanceGood =>
+export const chanceOf = (subject: VerdictSubject, policy: ShopFigures): ChanceGood =>
 	chanceGood({
 		kindId: subject.kind,
 		cause: subject.cause,
 		secondCause: subject.secondCause,
 		sureness: subject.sureness,
 		proofs: subject.proofs,
-		chances: policy.chances,
+		chances: chancesFor(subject.kind, policy),
 		proofOdds: policy.proofOdds
 	});
 
@@ -41,12 +43,12 @@ export const pricedGrade = (subject: VerdictSubject, level: Level): Grade =>
 export const priceAt = (
 	grade: Grade,
 	price: { newCents: number; copyCents: number | null },
-	policy: Policy
+	policy: ShopFigures
 ): UsedPrice =>
 	usedPrice({
 		newCents: price.newCents,
 		copyCents: price.copyCents,
-		share: policy.shares[grade],
+		share: shareFor(grade, policy),
 		copyCap: policy.copyCap,
 		stepCents: [
 			{ underCents: policy.stepLimitCents, stepCents: policy.stepLowCents },
@@ -79,11 +81,12 @@ const UNENDING = 1e-6;
 /** The figures of the gain, all but the used price that comes with it. */
 export function gainInput(
 	subject: VerdictSubject,
-	policy: Policy,
+	policy: ShopFigures,
 	season: Season,
 	usedCents: number
 ): GainInput {
 	const figures = figuresOf(subject.kind, policy);
+	const callsPerYear = callsFor(subject, policy);
 	const labour = policy.labourHourCents.normal / 60;
 	const mass = subject.massGrams ?? figures.massGrams;
 	const moneyRate = yearlyToContinuous(policy.moneyRate, 'money');
@@ -91,14 +94,14 @@ export function gainInput(
 	return {
 		usedCents,
 		chanceGood: chanceOf(subject, policy).chance,
-		comeBack: figures.comeBack,
+		comeBack: comeBackFor(subject.kind, policy),
 		comeBackCents: figures.refitMinutes * labour,
 		kitCents: figures.kitCents,
-		callsPerYear: figures.callsPerYear * FAMILY_FACTOR[subject.family],
+		callsPerYear,
 		place: subject.place,
 		moneyRate,
 		// a part that nobody calls for and that never dies out has no value to compute
-		dyingRate: moneyRate + dyingRate === 0 && figures.callsPerYear === 0 ? UNENDING : dyingRate,
+		dyingRate: moneyRate + dyingRate === 0 && callsPerYear === 0 ? UNENDING : dyingRate,
 		shelfCents: shelfCents(subject, policy).cents,
 		scrapCents: (mass / 1000) * scrapKgCents(kind(subject.kind).scrapClass, policy),
 		labourNow: policy.labourHourCents[season] / 60,

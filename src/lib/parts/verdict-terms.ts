@@ -4,6 +4,9 @@ import { seenSaid } from '$lib/prices/seen';
 import { findScrapClass, kind, type ChanceGood } from '$lib/trade';
 import type { Gain, GainInput, UsedPrice } from '$lib/worth';
 import { figuresOf } from './kind-figures';
+import { shareFor } from './learned';
+import { callsTaught, shareTaught } from './learned-said';
+import type { ShopFigures } from './learned-view';
 import { dyingShare, isTested, scrapKgCents, shelfCents } from './verdict-inputs';
 import type { VerdictSubject, VerdictTerm } from './verdict-view';
 import type { Grade } from './words';
@@ -11,7 +14,7 @@ import type { Grade } from './words';
 /** Everything a verdict was made of. `used` is null where there is no price. */
 export interface Basis {
 	subject: VerdictSubject;
-	policy: Policy;
+	policy: ShopFigures;
 	season: Season;
 	chance: ChanceGood;
 	grade: Grade;
@@ -31,6 +34,9 @@ const fromKind = (basis: Basis, ...fields: (keyof KindFigures)[]): string =>
 		? OWN
 		: "the kind's usual";
 
+/** The source of a figure with what stands behind it here. */
+const taught = (source: string, seen: string): string => (seen ? `${source}; ${seen}` : source);
+
 export const SEASON_SAID: Record<Season, string> = {
 	normal: 'at the normal rate',
 	slow: 'in the slow season',
@@ -47,9 +53,12 @@ function priceTerms({ subject, policy, grade, used }: Basis): VerdictTerm[] {
 		{ said: 'A new one costs', value: price.newCents, unit: 'cents', source },
 		{
 			said: `Share of new that it fetches ${waits}${grade}`,
-			value: policy.shares[grade],
+			value: shareFor(grade, policy),
 			unit: 'share',
-			source: from(policy, (p) => p.shares[grade])
+			source: taught(
+				from(policy, (p) => p.shares[grade]),
+				shareTaught(policy.taught?.share(grade), 'sold')
+			)
 		}
 	];
 	if (price.copyCents !== null)
@@ -77,7 +86,8 @@ function priceTerms({ subject, policy, grade, used }: Basis): VerdictTerm[] {
 function goodTerms(basis: Basis): VerdictTerm[] {
 	const { subject, policy, chance, worked } = basis;
 	const [cause, ...proved] = chance.terms.map(({ said }) => said);
-	const steps = [`${cause}: ${chance.level}`, ...proved].join('; ');
+	const tests = shareTaught(policy.taught?.chance(subject.kind, chance.level), 'tested');
+	const steps = [taught(`${cause}: ${chance.level}`, tests), ...proved].join('; ');
 	const { input, gain } = worked;
 	const figures = figuresOf(subject.kind, policy);
 	const rows: VerdictTerm[] = [
@@ -91,7 +101,10 @@ function goodTerms(basis: Basis): VerdictTerm[] {
 			said: 'Comes back all the same',
 			value: input.comeBack,
 			unit: 'share',
-			source: fromKind(basis, 'comeBack')
+			source: taught(
+				fromKind(basis, 'comeBack'),
+				shareTaught(policy.taught?.comeBack(subject.kind), 'gone out')
+			)
 		},
 		{
 			said: 'A come-back costs',
@@ -124,6 +137,7 @@ function waitTerms(basis: Basis): VerdictTerm[] {
 		subject.family === 'some'
 			? ''
 			: `; ${subject.family} of this engine about: times ${FAMILY_FACTOR[subject.family]}`;
+	const calls = policy.taught?.calls(subject.kind, subject.engineKey ?? '', subject.family);
 	const ages = kind(subject.kind).ages;
 	const dying = from(policy, (p) => (ages ? p.dyingRateAgeing : p.dyingRate));
 	const rows: VerdictTerm[] = [
@@ -131,7 +145,7 @@ function waitTerms(basis: Basis): VerdictTerm[] {
 			said: 'Calls for it',
 			value: input.callsPerYear,
 			unit: 'a year',
-			source: fromKind(basis, 'callsPerYear') + family
+			source: taught(fromKind(basis, 'callsPerYear') + family, callsTaught(calls))
 		},
 		{
 			said: 'Its place in the queue',

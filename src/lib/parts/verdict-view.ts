@@ -26,6 +26,8 @@ export interface VerdictSubject {
 	/** Still on its donor: pulling it is yet to be paid for. */
 	stillOn: boolean;
 	family: FamilyMark;
+	/** The engine it fits, as keys are made; left out where it is not known. */
+	engineKey?: string;
 	/** A customer waits whom no unit on the shelf answers. */
 	waiting: boolean;
 }

@@ -1,7 +1,8 @@
-import type { Policy } from '$lib/people/policy';
 import type { Season } from '$lib/people/settings';
 import { causeSaid, chanceLevel, kind, whyChance, type ChanceGood } from '$lib/trade';
 import { gain, verdictWord, type Gain, type GainInput, type VerdictWord } from '$lib/worth';
+import { shareFor } from './learned';
+import type { ShopFigures } from './learned-view';
 import { chanceOf, gainInput, isTested, priceAt, pricedGrade } from './verdict-inputs';
 import { verdictTerms } from './verdict-terms';
 import type { Verdict, VerdictPrice, VerdictSubject } from './verdict-view';
@@ -28,7 +29,12 @@ interface Worked {
 	gain: Gain;
 }
 
-function work(subject: VerdictSubject, policy: Policy, season: Season, usedCents: number): Worked {
+function work(
+	subject: VerdictSubject,
+	policy: ShopFigures,
+	season: Season,
+	usedCents: number
+): Worked {
 	const input = gainInput(subject, policy, season, usedCents);
 	return { input, gain: gain(input) };
 }
@@ -38,9 +44,9 @@ function lowestNew(
 	evenUsedCents: number | null,
 	grade: Grade,
 	copyCents: number | null,
-	policy: Policy
+	policy: ShopFigures
 ): { cents: number | null; copyBinds: boolean } {
-	const share = policy.shares[grade];
+	const share = shareFor(grade, policy);
 	if (evenUsedCents === null || share === 0) return { cents: null, copyBinds: false };
 	const copyBinds = copyCents !== null && policy.copyCap * copyCents < evenUsedCents;
 	return { cents: copyBinds ? null : Math.ceil(evenUsedCents / share - 1e-6), copyBinds };
@@ -49,7 +55,7 @@ function lowestNew(
 /** Keep, close call or let it go at either end of what new ones of the kind cost, where both agree. */
 function roughWord(
 	subject: VerdictSubject,
-	policy: Policy,
+	policy: ShopFigures,
 	season: Season,
 	grade: Grade
 ): VerdictWord | null {
@@ -62,7 +68,7 @@ function roughWord(
 	return low === high ? (low ?? null) : null;
 }
 
-function common(subject: VerdictSubject, grade: Grade, worked: Worked, policy: Policy) {
+function common(subject: VerdictSubject, grade: Grade, worked: Worked, policy: ShopFigures) {
 	const { price, have, place } = subject;
 	const { breakEvenUsedCents, waitYears, everCalled } = worked.gain;
 	const lowest = lowestNew(breakEvenUsedCents, grade, price?.copyCents ?? null, policy);
@@ -94,7 +100,7 @@ const UNPRICED = {
 
 function priced(
 	subject: VerdictSubject & { price: VerdictPrice },
-	policy: Policy,
+	policy: ShopFigures,
 	season: Season,
 	chance: ChanceGood,
 	grade: Grade
@@ -121,11 +127,11 @@ function priced(
 
 /**
  * The verdict on one part by the shop's policy: never, needs a price, or what the gain says.
- * In: the part with its place in the queue and the price that counts for it, the whole policy, the
- * season. Out: amounts in cents, the terms of the sum with their sources. Throws RangeError on an
+ * In: the part with its place in the queue and the price that counts for it, the whole policy with
+ * what the shop's history has taught it, the season. Out: amounts in cents, the terms of the sum with their sources. Throws RangeError on an
  * unknown kind or cause.
  */
-export function verdictOf(subject: VerdictSubject, policy: Policy, season: Season): Verdict {
+export function verdictOf(subject: VerdictSubject, policy: ShopFigures, season: Season): Verdict {
 	const chance = chanceOf(subject, policy);
 	const grade = pricedGrade(subject, chance.level);
 	const reason = neverReason(subject, chance);

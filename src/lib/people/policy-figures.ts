@@ -9,7 +9,11 @@ export type FigureUnit =
 	| 'money a year'
 	| 'minutes'
 	| 'times the odds'
-	| 'days';
+	| 'days'
+	| 'tests'
+	| 'parts out'
+	| 'years'
+	| 'sales';
 
 /** One figure of the policy as the page asks for it. */
 export interface PolicyFigure {
@@ -95,6 +99,16 @@ export const FIGURE_GROUPS: readonly FigureGroup[] = [
 			figure(['proofOdds', 'worked in place'], 'Worked in place', 'times the odds'),
 			figure(['proofOdds', 'bench test cold'], 'Bench test cold passed', 'times the odds'),
 			figure(['proofOdds', 'bench test hot'], 'Bench test hot passed', 'times the odds')
+		]
+	},
+	{
+		title: 'How slowly it learns',
+		lead: 'What each figure weighs against what this shop sees itself. The more, the slower it moves.',
+		figures: [
+			figure(['priors', 'chance'], 'A chance of being good', 'tests', 'Bench tests of the kind'),
+			figure(['priors', 'comeBacks'], 'A share of come-backs', 'parts out', 'Fitted or sold'),
+			figure(['priors', 'rateYears'], 'Calls a year', 'years', 'With one on the shelf'),
+			figure(['priors', 'shareSales'], 'A share of new', 'sales', 'Of the grade')
 		]
 	}
 ];

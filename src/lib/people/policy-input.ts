@@ -12,6 +12,7 @@ interface Range {
 }
 
 const MONEY: Range = { least: 0, most: 1_000_000 };
+const WEIGHT: Range = { least: 0.5, most: 1000 };
 
 const RANGE: Record<FigureUnit, Range> = {
 	'per cent': { least: 0, most: 100 },
@@ -21,7 +22,11 @@ const RANGE: Record<FigureUnit, Range> = {
 	'money a year': MONEY,
 	minutes: { least: 0, most: 1000 },
 	'times the odds': { least: 0.01, most: 1000 },
-	days: { least: 1, most: 3650, whole: true }
+	days: { least: 1, most: 3650, whole: true },
+	tests: WEIGHT,
+	'parts out': WEIGHT,
+	years: WEIGHT,
+	sales: WEIGHT
 };
 
 const STEP: Range = { least: 0.01, most: 10_000 };

@@ -4,6 +4,7 @@ const share = z.number().min(0).max(1);
 const cents = z.number().int().min(0).max(100_000_000);
 const yearly = z.number().min(0).lt(1);
 const count = z.number().min(0).max(1000);
+const weight = z.number().min(0.5).max(1000);
 
 /** What the shop may set for one kind; what is absent is the kind's usual figure. */
 export const KindFigures = z
@@ -64,6 +65,17 @@ export const Policy = z.object({
 		'bench test cold': z.number().positive().max(1000),
 		'bench test hot': z.number().positive().max(1000)
 	}),
+	/** What a figure that is believed weighs against what the shop has seen. */
+	priors: z.object({
+		/** Bench tests that a chance is worth. */
+		chance: weight,
+		/** Parts gone out that the share of come-backs is worth. */
+		comeBacks: weight,
+		/** Years of watching that calls a year are worth. */
+		rateYears: weight,
+		/** Sales that a share of new is worth. */
+		shareSales: weight
+	}),
 	/** Scrap, cents a kilogram, by metal class; what is absent is the usual middle. */
 	scrapKgCents: z.record(z.string(), cents),
 	families: z.record(z.string(), z.enum(['lots', 'some', 'hardly'])),
@@ -97,6 +109,7 @@ export const DEFAULT_POLICY: Policy = {
 		'bench test cold': 10,
 		'bench test hot': 25
 	},
+	priors: { chance: 4, comeBacks: 20, rateYears: 2, shareSales: 5 },
 	scrapKgCents: {},
 	families: {},
 	kinds: {}
@@ -111,6 +124,7 @@ export function withDefaults(own: Partial<Policy>): Policy {
 		labourHourCents: { ...DEFAULT_POLICY.labourHourCents, ...own.labourHourCents },
 		shelfCents: { ...DEFAULT_POLICY.shelfCents, ...own.shelfCents },
 		chances: { ...DEFAULT_POLICY.chances, ...own.chances },
-		proofOdds: { ...DEFAULT_POLICY.proofOdds, ...own.proofOdds }
+		proofOdds: { ...DEFAULT_POLICY.proofOdds, ...own.proofOdds },
+		priors: { ...DEFAULT_POLICY.priors, ...own.priors }
 	});
 }

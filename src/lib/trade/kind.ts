@@ -36,6 +36,8 @@ export interface Kind {
 	newHighCents: number;
 	pullMinutes: number;
 	behind: readonly string[];
+	/** What taking it off spoils. */
+	ruins?: readonly string[];
 	cleanMinutes: number;
 	testMinutes: number;
 	cleanKeeps: boolean;

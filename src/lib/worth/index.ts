@@ -15,6 +15,8 @@ export { learnChance, type ChanceToLearn } from './learn-chance';
 export { learnRate, type RateToLearn } from './learn-rate';
 export { learnShare, type ShareToLearn, type SharesSeen } from './learn-share';
 export type { Learned, MeanPrior } from './learn-input';
+export { pulledOnCall, type ParkedInput } from './park';
+export { reach, type Waiting } from './waiting';
 export { pullPlan, type PullPlan, type PullStep } from './pull-plan';
 export type { PullInput, PullPart } from './pull-input';
 export { decide, type ChoiceName, type Decision, type Tip } from './decide';

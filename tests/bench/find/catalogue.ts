@@ -20,13 +20,20 @@ export interface Catalogue {
 	words: string[];
 }
 
-const STARTS = 'bra cor dun fel gar hol jun kel lor mar nor pel ras sol tar und vor wen yar zel'.split(' ');
+const STARTS =
+	'bra cor dun fel gar hol jun kel lor mar nor pel ras sol tar und vor wen yar zel'.split(' ');
 const ENDS = 'dane fox gate hurst kvik lane mond nell oke pike rake sted tham vale wick'.split(' ');
-const TRADE = `bolt bracket spring gasket rusty clean boxed dusty long short left right upper lower screw clip cover plate
+const TRADE =
+	`bolt bracket spring gasket rusty clean boxed dusty long short left right upper lower screw clip cover plate
 	threads stripped repaired welded cracked corner painted faded label missing faint scratch dent complete partial lever
-	cable linkage hose pipe clamp rubber plastic steel brass alloy cast bent straight tight loose worn smooth noisy quiet`.split(/\s+/);
+	cable linkage hose pipe clamp rubber plastic steel brass alloy cast bent straight tight loose worn smooth noisy quiet`.split(
+		/\s+/
+	);
 const CLASSES = [...'WB WB GP GP R1 R2 SN GE SA TR PW'.split(' ')] as EngineClass[];
-const CCS = [35, 50, 72, 125, 148, 163, 173, 190, 196, 208, 212, 223, 270, 301, 344, 389, 420, 459, 500, 603, 656, 724];
+const CCS = [
+	35, 50, 72, 125, 148, 163, 173, 190, 196, 208, 212, 223, 270, 301, 344, 389, 420, 459, 500, 603,
+	656, 724
+];
 
 /** A number in one of six ways of writing numbers. */
 function stamped(random: Random, maker: number): string {
@@ -55,7 +62,13 @@ export function makeCatalogue(seed: number): Catalogue {
 	const families = Array.from({ length: 298 }, (_, at): Family => {
 		const model = `${random.letters(2)}${random.pick(['-', '', ' '])}${random.digits(3)}${random.letters(1)}`;
 		const shaft = random.chance(0.5) ? 'horizontal' : 'vertical';
-		return { maker: makers[at % 24]!, model, cc: random.pick(CCS), class: random.pick(CLASSES), shaft };
+		return {
+			maker: makers[at % 24]!,
+			model,
+			cc: random.pick(CCS),
+			class: random.pick(CLASSES),
+			shaft
+		};
 	});
 	const numbers = families.map((family, at) => {
 		const own = kinds.filter((kind) => isOn(kind, family));
@@ -67,6 +80,9 @@ export function makeCatalogue(seed: number): Catalogue {
 			if (number && random.chance(0.12)) replaced.set(stamped(random, random.below(6)), number);
 	for (const old of [...replaced.keys()])
 		if (random.chance(0.33)) replaced.set(stamped(random, random.below(6)), old);
-	const made = Array.from({ length: 700 }, () => random.pick(STARTS) + random.pick(['a', 'e', 'i', 'o']) + random.pick(ENDS));
+	const made = Array.from(
+		{ length: 700 },
+		() => random.pick(STARTS) + random.pick(['a', 'e', 'i', 'o']) + random.pick(ENDS)
+	);
 	return { makers, families, numbers, replaced, words: [...new Set([...TRADE, ...made])] };
 }

@@ -25,7 +25,10 @@ class CopyIn {
 	submit(connection: { query(text: string): void }) {
 		connection.query(this.text);
 	}
-	handleCopyInResponse(connection: { sendCopyFromChunk(chunk: Buffer): void; endCopyFrom(): void }) {
+	handleCopyInResponse(connection: {
+		sendCopyFromChunk(chunk: Buffer): void;
+		endCopyFrom(): void;
+	}) {
 		connection.sendCopyFromChunk(Buffer.from(this.rows));
 		connection.endCopyFrom();
 	}
@@ -43,13 +46,20 @@ type Value = string | number | boolean | null | undefined | readonly string[];
 function cell(value: Value): string {
 	if (value === null || value === undefined) return '\\N';
 	if (Array.isArray(value)) return cell(`{${value.map((one) => JSON.stringify(one)).join(',')}}`);
-	return String(value).replace(/[\\\t\n\r]/g, (one) => ({ '\t': '\\t', '\n': '\\n', '\r': '\\r' })[one] ?? '\\\\');
+	return String(value).replace(
+		/[\\\t\n\r]/g,
+		(one) => ({ '\t': '\\t', '\n': '\\n', '\r': '\\r' })[one] ?? '\\\\'
+	);
 }
 
 const BATCH = 40_000;
 
 /** Copies rows into a table, named by the columns of the first. */
-export async function copyInto(client: pg.Client, table: string, rows: Iterable<Record<string, Value>>) {
+export async function copyInto(
+	client: pg.Client,
+	table: string,
+	rows: Iterable<Record<string, Value>>
+) {
 	let text = '';
 	let columns = '';
 	let count = 0;
@@ -169,55 +179,172 @@ const INDEXES = {
 };
 
 /** Loads a world as the superuser; the rows that parts are found by are made by the product's own functions. */
-export async function loadWorld(client: pg.Client, world: World, say: (line: string) => void): Promise<Tagged[]> {
+export async function loadWorld(
+	client: pg.Client,
+	world: World,
+	say: (line: string) => void
+): Promise<Tagged[]> {
 	const random = new Random(77);
 	await client.query(`set session_replication_role = replica; set synchronous_commit = off`);
 	for (const name of Object.keys(INDEXES)) await client.query(`drop index ${name}`);
-	await copyInto(client, 'shop', world.shops.map(({ id }) => ({ id, slug: `bench-${id}`, name: `Bench ${id}`, currency: 'USD', time_zone: 'UTC', units: 'inch', season: 'normal', created_at: when(TODAY) })));
-	await copyInto(client, 'member', world.shops.map(({ id }) => ({ shop_id: id, id, name: 'A script', role: 'owner', joined_at: when(TODAY) })));
+	await copyInto(
+		client,
+		'shop',
+		world.shops.map(({ id }) => ({
+			id,
+			slug: `bench-${id}`,
+			name: `Bench ${id}`,
+			currency: 'USD',
+			time_zone: 'UTC',
+			units: 'inch',
+			season: 'normal',
+			created_at: when(TODAY)
+		}))
+	);
+	await copyInto(
+		client,
+		'member',
+		world.shops.map(({ id }) => ({
+			shop_id: id,
+			id,
+			name: 'A script',
+			role: 'owner',
+			joined_at: when(TODAY)
+		}))
+	);
+	const keyOf = (family: number) => {
+		const { maker, model } = world.catalogue.families[family]!;
+		return engineKey(`${maker} ${model}`);
+	};
 	const tagged: Tagged[] = world.shops.map(() => ({ bins: [], parts: new Map() }));
 	let binId = 0;
 	const firstBin: number[] = [];
 	for (const [at, shop] of world.shops.entries()) {
 		firstBin.push(binId + 1);
 		const tags = [...tagsFor(shop.bins.length + shop.parts.length, random)];
-		const bins = shop.bins.map((address, n) => ({ shop_id: shop.id, id: ++binId, tag: tags[n]!, address, size: 'm', created_at: when(TODAY) }));
+		const bins = shop.bins.map((address, n) => ({
+			shop_id: shop.id,
+			id: ++binId,
+			tag: tags[n]!,
+			address,
+			size: 'm',
+			created_at: when(TODAY)
+		}));
 		tagged[at]!.bins = bins.map(({ tag }) => tag);
 		shop.parts.forEach(({ id }, n) => tagged[at]!.parts.set(id, tags[shop.bins.length + n]!));
-		await copyInto(client, 'tag', tags.map((code, n) => ({ shop_id: shop.id, code, what: n < bins.length ? 'bin' : 'part', minted_at: when(TODAY) })));
+		await copyInto(
+			client,
+			'tag',
+			tags.map((code, n) => ({
+				shop_id: shop.id,
+				code,
+				what: n < bins.length ? 'bin' : 'part',
+				minted_at: when(TODAY)
+			}))
+		);
 		await copyInto(client, 'bin', bins);
-		await copyInto(client, 'donor', shop.donors.map((donor) => donorRow(world, donor)));
+		await copyInto(
+			client,
+			'donor',
+			shop.donors.map((donor) => donorRow(world, donor))
+		);
 		await copyInto(client, 'price', priceRows(world, shop, random));
 	}
 	say('donors, bins and prices are in');
 	const all = world.shops.flatMap((shop) => shop.parts).sort((a, b) => a.id - b.id);
-	await copyInto(client, 'part', (function* () {
-		for (const part of all)
-			yield partRow(world, part, tagged[part.shop - 1]!.parts.get(part.id)!, part.bin === null ? null : firstBin[part.shop - 1]! + part.bin);
-	})());
-	await copyInto(client, 'proof', (function* () {
-		for (const { shop, id, proved, pulled } of all)
-			if (proved) yield { shop_id: shop, part_id: id, how: proved, passed: true, member_id: shop, at: when(pulled) };
-	})());
-	await copyInto(client, 'found_number', (function* () {
-		for (const { shop, id, number } of all) if (numberKey(number)) yield { shop_id: shop, key: numberKey(number), part_id: id };
-	})());
+	await copyInto(
+		client,
+		'part',
+		(function* () {
+			for (const part of all)
+				yield partRow(
+					world,
+					part,
+					tagged[part.shop - 1]!.parts.get(part.id)!,
+					part.bin === null ? null : firstBin[part.shop - 1]! + part.bin
+				);
+		})()
+	);
+	await copyInto(
+		client,
+		'proof',
+		(function* () {
+			for (const { shop, id, proved, pulled } of all)
+				if (proved)
+					yield {
+						shop_id: shop,
+						part_id: id,
+						how: proved,
+						passed: true,
+						member_id: shop,
+						at: when(pulled)
+					};
+		})()
+	);
+	await copyInto(
+		client,
+		'found_number',
+		(function* () {
+			for (const { shop, id, number, kind, family } of all)
+				if (numberKey(number))
+					yield {
+						shop_id: shop,
+						key: numberKey(number),
+						part_id: id,
+						kind,
+						engine_key: keyOf(family)
+					};
+		})()
+	);
 	for (const { id, parts } of world.shops) {
 		const here = new Set(parts.map(({ number }) => number));
-		const chains = [...world.catalogue.replaced].filter(([, next]) => here.has(next) || here.has(world.catalogue.replaced.get(next) ?? ''));
-		await copyInto(client, 'supersession', chains.map(([old, next]) => ({ shop_id: id, old_number: old, old_key: numberKey(old), new_number: next, new_key: numberKey(next), member_id: id, at: when(TODAY) })).filter((row) => row.old_key !== row.new_key));
+		const chains = [...world.catalogue.replaced].filter(
+			([, next]) => here.has(next) || here.has(world.catalogue.replaced.get(next) ?? '')
+		);
+		await copyInto(
+			client,
+			'supersession',
+			chains
+				.map(([old, next]) => ({
+					shop_id: id,
+					old_number: old,
+					old_key: numberKey(old),
+					new_number: next,
+					new_key: numberKey(next),
+					member_id: id,
+					at: when(TODAY)
+				}))
+				.filter((row) => row.old_key !== row.new_key)
+		);
 	}
 	say('parts are in');
 	await client.query('analyze');
 	for (const { id, parts } of world.shops) {
 		for (let at = 0; at < parts.length; at += 5000)
-			await client.query('select follow_parts($1, $2)', [id, parts.slice(at, at + 5000).map((part) => part.id)]);
+			await client.query('select follow_parts($1, $2)', [
+				id,
+				parts.slice(at, at + 5000).map((part) => part.id)
+			]);
 	}
 	await mixHeap(client);
-	for (const [name, made] of Object.entries(INDEXES)) await client.query(`create index ${name} ${made}`);
-	for (const { id, parts } of world.shops) await client.query('select follow_words($1, $2)', [id, parts.map((part) => part.id)]);
-	for (const table of ['shop', 'member', 'bin', 'donor', 'price', 'part', 'proof', 'supersession', 'shop_word'])
-		await client.query(`select setval(pg_get_serial_sequence('${table}', 'id'), (select coalesce(max(id), 0) + 1 from ${table}))`);
+	for (const [name, made] of Object.entries(INDEXES))
+		await client.query(`create index ${name} ${made}`);
+	for (const { id, parts } of world.shops)
+		await client.query('select follow_words($1, $2)', [id, parts.map((part) => part.id)]);
+	for (const table of [
+		'shop',
+		'member',
+		'bin',
+		'donor',
+		'price',
+		'part',
+		'proof',
+		'supersession',
+		'shop_word'
+	])
+		await client.query(
+			`select setval(pg_get_serial_sequence('${table}', 'id'), (select coalesce(max(id), 0) + 1 from ${table}))`
+		);
 	await client.query('set session_replication_role = default');
 	await client.query('vacuum analyze');
 	say('found_by and its indexes are made');

@@ -26,12 +26,17 @@ const idsOf = (parts: readonly WorldPart[]) => parts.map(({ id }) => id);
 const familyOf = ({ world }: Setting, { family }: WorldPart) => world.catalogue.families[family]!;
 const flip = (text: string) => text.replaceAll('0', 'o').replaceAll('1', 'I');
 
-const fullNumbers = ({ here }: Setting) => here.filter(({ number }) => numberKey(number).length >= 6);
+const fullNumbers = ({ here }: Setting) =>
+	here.filter(({ number }) => numberKey(number).length >= 6);
 
 /** Parts that carry a number, or one that takes its place. */
 function withNumber({ here, world }: Setting, number: string): WorldPart[] {
 	const keys = new Set([numberKey(number)]);
-	for (let next = world.catalogue.replaced.get(number); next; next = world.catalogue.replaced.get(next))
+	for (
+		let next = world.catalogue.replaced.get(number);
+		next;
+		next = world.catalogue.replaced.get(next)
+	)
 		keys.add(numberKey(next));
 	return here.filter((part) => part.number && keys.has(numberKey(part.number)));
 }
@@ -43,8 +48,17 @@ function exact(s: Setting): Question {
 
 function mangled(s: Setting): Question {
 	const { number } = s.random.pick(fullNumbers(s));
-	const ways = [numberKey(number), flip(number), flip(numberKey(number).toLowerCase()), number.replace(/[-. ]/g, ' ')];
-	return { class: 'number mangled', typed: s.random.pick(ways), right: idsOf(withNumber(s, number)) };
+	const ways = [
+		numberKey(number),
+		flip(number),
+		flip(numberKey(number).toLowerCase()),
+		number.replace(/[-. ]/g, ' ')
+	];
+	return {
+		class: 'number mangled',
+		typed: s.random.pick(ways),
+		right: idsOf(withNumber(s, number))
+	};
 }
 
 const superseded = (s: Setting): Question | null => {
@@ -68,29 +82,44 @@ const modelQuestion = (s: Setting): Question => {
 	const { model, maker } = familyOf(s, part);
 	const kind = kinds.find(({ id }) => id === part.kind)!;
 	const said = kind.name.split(/[,/(]/)[0]!.trim().toLowerCase();
-	const typed = s.random.pick([`${said} ${model}`, `${model.toLowerCase()} ${said}`, `${maker} ${model} ${said}`]);
+	const typed = s.random.pick([
+		`${said} ${model}`,
+		`${model.toLowerCase()} ${said}`,
+		`${maker} ${model} ${said}`
+	]);
 	const right = idsOf(s.here.filter((one) => one.kind === part.kind && one.family === part.family));
 	return { class: 'kind and model', typed, right: kindsOf(said).includes(part.kind) ? right : [] };
 };
 
 /** The kinds that are called so, read off the trade's list itself. */
 const kindsOf = (said: string) =>
-	matchKinds(said).filter(({ how }) => how !== 'near').map(({ kind }) => kind.id);
+	matchKinds(said)
+		.filter(({ how }) => how !== 'near')
+		.map(({ kind }) => kind.id);
 
 const bare = (said: string) => wordsOf(said).join(' ');
 /** Every kind that has this name, however many it has, a plural being none. */
 const namedBy = (said: string) =>
-	kinds.filter(({ alsoCalled, name }) => [name, name.split(/[,/(]/)[0]!, ...alsoCalled].some((one) => bare(one) === bare(said)));
+	kinds.filter(({ alsoCalled, name }) =>
+		[name, name.split(/[,/(]/)[0]!, ...alsoCalled].some((one) => bare(one) === bare(said))
+	);
 
 const alone = kinds.flatMap((kind) =>
-	[kind.name.split(/[,/(]/)[0]!, ...kind.alsoCalled].map((said) => said.toLowerCase().trim()).filter((said) => {
-		return namedBy(said).length === 1 && said.length > 3;
-	}).map((said) => ({ said, kind: kind.id }))
+	[kind.name.split(/[,/(]/)[0]!, ...kind.alsoCalled]
+		.map((said) => said.toLowerCase().trim())
+		.filter((said) => {
+			return namedBy(said).length === 1 && said.length > 3;
+		})
+		.map((said) => ({ said, kind: kind.id }))
 );
 
 function called(s: Setting): Question {
 	const { said, kind } = s.random.pick(alone);
-	return { class: 'called', typed: said, right: idsOf(s.here.filter((part) => part.kind === kind)) };
+	return {
+		class: 'called',
+		typed: said,
+		right: idsOf(s.here.filter((part) => part.kind === kind))
+	};
 }
 
 /** One slip of the finger: a letter lost, doubled, swapped or wrong; never the first. */
@@ -107,42 +136,76 @@ function slip(random: Random, word: string): string {
 
 const plainNames = kinds.flatMap(({ id, name }) => {
 	const word = name.split(/[,/( ]/)[0]!.toLowerCase();
-	return word.length >= 7 && kinds.filter((one) => one.name.toLowerCase().includes(word) || one.alsoCalled.join(' ').includes(word)).length === 1 ? [{ word, id }] : [];
+	return word.length >= 7 &&
+		kinds.filter(
+			(one) => one.name.toLowerCase().includes(word) || one.alsoCalled.join(' ').includes(word)
+		).length === 1
+		? [{ word, id }]
+		: [];
 });
 
 function slipped(s: Setting): Question {
 	const { word, id } = s.random.pick(plainNames);
-	return { class: 'misspelt', typed: slip(s.random, word), right: idsOf(s.here.filter((part) => part.kind === id)) };
+	return {
+		class: 'misspelt',
+		typed: slip(s.random, word),
+		right: idsOf(s.here.filter((part) => part.kind === id))
+	};
 }
 
 function makerSlipped(s: Setting): Question {
 	const { word, id } = s.random.pick(plainNames);
 	const { maker } = familyOf(s, s.random.pick(s.here));
 	const right = s.here.filter((part) => part.kind === id && familyOf(s, part).maker === maker);
-	return { class: 'maker misspelt', typed: `${word} ${slip(s.random, maker.toLowerCase())}`, right: idsOf(right) };
+	return {
+		class: 'maker misspelt',
+		typed: `${word} ${slip(s.random, maker.toLowerCase())}`,
+		right: idsOf(right)
+	};
 }
 
 function displaced(s: Setting): Question {
 	const { word, id } = s.random.pick(plainNames);
 	const { cc } = familyOf(s, s.random.pick(s.here.filter(({ donor }) => donor)));
-	const right = s.here.filter((part) => part.kind === id && part.donor && familyOf(s, part).cc === cc);
-	return { class: 'displacement', typed: s.random.pick([`${word} ${cc}cc`, `${cc} cc ${word}`]), right: idsOf(right) };
+	const right = s.here.filter(
+		(part) => part.kind === id && part.donor && familyOf(s, part).cc === cc
+	);
+	return {
+		class: 'displacement',
+		typed: s.random.pick([`${word} ${cc}cc`, `${cc} cc ${word}`]),
+		right: idsOf(right)
+	};
 }
 
 const SAME: [string, string][] = [
-	['hole 3/4 in', '3/4'], ['hole 3/4 in', '0.75"'], ['bore 1 in', 'one inch'], ['bore 1 in', '25.4 mm'], ['hole 25 mm', '25mm'],
-	['shaft 7/8 in', '22.2 mm'], ['pin 10 tooth', '10 teeth'], ['spacing 42 mm', '42 mm'], ['length 2 7/16 in', '2-7/16']
+	['hole 3/4 in', '3/4'],
+	['hole 3/4 in', '0.75"'],
+	['bore 1 in', 'one inch'],
+	['bore 1 in', '25.4 mm'],
+	['hole 25 mm', '25mm'],
+	['shaft 7/8 in', '22.2 mm'],
+	['pin 10 tooth', '10 teeth'],
+	['spacing 42 mm', '42 mm'],
+	['length 2 7/16 in', '2-7/16']
 ];
 
 function sized(s: Setting): Question {
 	const [written, asked] = s.random.pick(SAME);
-	return { class: 'size', typed: `${asked} ${written.split(' ')[0]}`, right: idsOf(s.here.filter(({ note }) => note.includes(written))) };
+	return {
+		class: 'size',
+		typed: `${asked} ${written.split(' ')[0]}`,
+		right: idsOf(s.here.filter(({ note }) => note.includes(written)))
+	};
 }
 
 function bin(s: Setting): Question {
 	const at = s.random.below(s.shop.bins.length);
 	const address = s.shop.bins[at]!;
-	return { class: 'bin', typed: s.random.pick([address, address.toLowerCase()]), right: idsOf(s.here.filter((part) => part.bin === at)) };
+	return {
+		class: 'bin',
+		typed: s.random.pick([address, address.toLowerCase()]),
+		right: idsOf(s.here.filter((part) => part.bin === at))
+	};
 }
 
 function offDonor(s: Setting): Question {
@@ -161,9 +224,20 @@ function serial(s: Setting): Question {
 }
 
 function note(s: Setting): Question {
-	const words = s.random.pick(s.here.filter(({ note }) => note.split(' ').length > 2)).note.split(' ').filter((word) => /^[a-z]{4,}$/.test(word)).slice(0, 2);
+	const words = s.random
+		.pick(s.here.filter(({ note }) => note.split(' ').length > 2))
+		.note.split(' ')
+		.filter((word) => /^[a-z]{4,}$/.test(word))
+		.slice(0, 2);
 	const has = (part: WorldPart) => words.every((word) => part.note.split(' ').includes(word));
-	return { class: 'note', typed: words.join(' '), right: words.length < 2 || words.some((word) => kindsOf(word).length > 0) ? [] : idsOf(s.here.filter(has)) };
+	return {
+		class: 'note',
+		typed: words.join(' '),
+		right:
+			words.length < 2 || words.some((word) => kindsOf(word).length > 0)
+				? []
+				: idsOf(s.here.filter(has))
+	};
 }
 
 const MONTHS = 'jan feb mar apr may jun jul aug sep oct nov dec'.split(' ');
@@ -172,9 +246,20 @@ function dated(s: Setting): Question {
 	const part = s.random.pick(s.here.filter(({ donor }) => donor?.cause === 'thrown-rod'));
 	const day = new Date(part.donor!.takenIn);
 	const word = s.random.pick(plainNames.filter(({ id }) => s.here.some((one) => one.kind === id)));
-	const month = (time: number) => `${new Date(time).getUTCFullYear()} ${new Date(time).getUTCMonth()}`;
-	const right = s.here.filter((one) => one.kind === word.id && one.donor && ['thrown-rod', 'no-oil', 'broken-block', 'lean'].includes(one.donor.cause) && month(one.donor.takenIn) === month(part.donor!.takenIn));
-	return { class: 'cause and month', typed: `${MONTHS[day.getUTCMonth()]} ${`${day.getUTCFullYear()}`.slice(2)} blown engine ${word.word}`, right: idsOf(right) };
+	const month = (time: number) =>
+		`${new Date(time).getUTCFullYear()} ${new Date(time).getUTCMonth()}`;
+	const right = s.here.filter(
+		(one) =>
+			one.kind === word.id &&
+			one.donor &&
+			['thrown-rod', 'no-oil', 'broken-block', 'lean'].includes(one.donor.cause) &&
+			month(one.donor.takenIn) === month(part.donor!.takenIn)
+	);
+	return {
+		class: 'cause and month',
+		typed: `${MONTHS[day.getUTCMonth()]} ${`${day.getUTCFullYear()}`.slice(2)} blown engine ${word.word}`,
+		right: idsOf(right)
+	};
 }
 
 function tag(s: Setting): Question {
@@ -186,7 +271,11 @@ function tagSlip(s: Setting): Question {
 	const part = s.random.pick(s.here);
 	const right = s.tags.parts.get(part.id)!;
 	const at = s.random.below(right.length);
-	return { class: 'tag with a slip', typed: right.slice(0, at) + s.random.letters(1, '23456789') + right.slice(at + 1), right: [part.id] };
+	return {
+		class: 'tag with a slip',
+		typed: right.slice(0, at) + s.random.letters(1, '23456789') + right.slice(at + 1),
+		right: [part.id]
+	};
 }
 
 function reordered(s: Setting): Question {
@@ -196,20 +285,52 @@ function reordered(s: Setting): Question {
 
 const none = (s: Setting): Question => ({
 	class: 'none',
-	typed: s.random.pick([`qx${s.random.letters(3)}zz${s.random.digits(5)}`, `${s.random.letters(9, 'qxzvjk')} ${s.random.letters(7, 'qxzvjk')}`, `${s.random.digits(13)}`]),
+	typed: s.random.pick([
+		`qx${s.random.letters(3)}zz${s.random.digits(5)}`,
+		`${s.random.letters(9, 'qxzvjk')} ${s.random.letters(7, 'qxzvjk')}`,
+		`${s.random.digits(13)}`
+	]),
 	right: []
 });
 
 const MAKERS: [(s: Setting) => Question | null, number][] = [
-	[exact, 40], [mangled, 40], [superseded, 25],
-	[(s) => fragment(s, 'begins'), 25], [(s) => fragment(s, 'ends'), 25], [(s) => fragment(s, 'inside'), 25],
-	[modelQuestion, 40], [called, 40], [slipped, 25], [makerSlipped, 25], [displaced, 30], [sized, 20], [bin, 25],
-	[offDonor, 20], [serial, 20], [note, 25], [dated, 15], [tag, 20], [tagSlip, 15], [reordered, 25], [none, 25]
+	[exact, 40],
+	[mangled, 40],
+	[superseded, 25],
+	[(s) => fragment(s, 'begins'), 25],
+	[(s) => fragment(s, 'ends'), 25],
+	[(s) => fragment(s, 'inside'), 25],
+	[modelQuestion, 40],
+	[called, 40],
+	[slipped, 25],
+	[makerSlipped, 25],
+	[displaced, 30],
+	[sized, 20],
+	[bin, 25],
+	[offDonor, 20],
+	[serial, 20],
+	[note, 25],
+	[dated, 15],
+	[tag, 20],
+	[tagSlip, 15],
+	[reordered, 25],
+	[none, 25]
 ];
 
 /** About 550 questions for one shop; each but those of the last class has an answer. */
-export function makeQuestions(world: World, shop: WorldShop, tags: Tagged, seed: number): Question[] {
-	const s: Setting = { random: new Random(seed), world, shop, tags, here: shop.parts.filter(isHere) };
+export function makeQuestions(
+	world: World,
+	shop: WorldShop,
+	tags: Tagged,
+	seed: number
+): Question[] {
+	const s: Setting = {
+		random: new Random(seed),
+		world,
+		shop,
+		tags,
+		here: shop.parts.filter(isHere)
+	};
 	return MAKERS.flatMap(([make, count]) => {
 		const made: Question[] = [];
 		for (let tries = 0; made.length < count && tries < count * 60; tries += 1) {

@@ -16,7 +16,8 @@ export interface ClassScore {
 	p99: number;
 }
 
-const mean = (values: readonly number[]) => values.reduce((a, b) => a + b, 0) / (values.length || 1);
+const mean = (values: readonly number[]) =>
+	values.reduce((a, b) => a + b, 0) / (values.length || 1);
 
 export function percentile(values: readonly number[], share: number): number {
 	const sorted = [...values].sort((a, b) => a - b);
@@ -39,7 +40,10 @@ export function rankOf(question: Question, { ids, total }: Answered): number {
 }
 
 /** Each class by itself, and all of those that have an answer together. */
-export function scored(questions: readonly Question[], answers: readonly Answered[][]): ClassScore[] {
+export function scored(
+	questions: readonly Question[],
+	answers: readonly Answered[][]
+): ClassScore[] {
 	const rows = questions.map((question, at) => ({ question, passes: answers[at]! }));
 	const row = (name: string, some: typeof rows): ClassScore => {
 		const times = some.flatMap(({ passes }) => passes.map(({ ms }) => ms));
@@ -55,7 +59,15 @@ export function scored(questions: readonly Question[], answers: readonly Answere
 	};
 	const names = [...new Set(questions.map((question) => question.class))];
 	return [
-		...names.map((name) => row(name, rows.filter(({ question }) => question.class === name))),
-		row('ALL', rows.filter(({ question }) => question.class !== 'none'))
+		...names.map((name) =>
+			row(
+				name,
+				rows.filter(({ question }) => question.class === name)
+			)
+		),
+		row(
+			'ALL',
+			rows.filter(({ question }) => question.class !== 'none')
+		)
 	];
 }

@@ -45,7 +45,18 @@ export interface World {
 const DAY = 86_400_000;
 export const TODAY = Date.UTC(2026, 11, 1);
 const STATES: PartState[] = ['shelved', 'pulled', 'held', 'out', 'scrapped'];
-const SIZES = ['hole 3/4 in', 'hole 25 mm', 'bore 1 in', 'spacing 42 mm', 'shaft 7/8 in', 'pin 10 tooth', 'plug 12 v', '6.5 hp', 'shaft 1-1/8 in', 'length 2 7/16 in'];
+const SIZES = [
+	'hole 3/4 in',
+	'hole 25 mm',
+	'bore 1 in',
+	'spacing 42 mm',
+	'shaft 7/8 in',
+	'pin 10 tooth',
+	'plug 12 v',
+	'6.5 hp',
+	'shaft 1-1/8 in',
+	'length 2 7/16 in'
+];
 
 /** Sizes of shops by rank: few large ones, many small. */
 export function shopSizes(shops: number, parts: number): number[] {
@@ -58,7 +69,9 @@ const binName = (at: number) =>
 	`${String.fromCharCode(65 + (Math.floor(at / 40) % 26))}${1 + Math.floor(at / 1040)}-${1 + (at % 40)}`;
 
 /** Kinds by how often they lie on a shelf: what is called for most stands there most. */
-const byCalls = [...kinds].filter(({ reuse }) => reuse !== 'never').sort((a, b) => b.callsPerYear - a.callsPerYear);
+const byCalls = [...kinds]
+	.filter(({ reuse }) => reuse !== 'never')
+	.sort((a, b) => b.callsPerYear - a.callsPerYear);
 
 function donorOf(random: Random, shop: number, number: number, id: number): WorldDonor {
 	return {
@@ -84,7 +97,9 @@ function noteOf(random: Random, { words }: Catalogue): string {
 function partOf(random: Random, world: Catalogue, shop: WorldShop, id: number): WorldPart {
 	const donor = random.chance(0.8) ? random.pick(shop.donors) : null;
 	const family = donor ? donor.family : random.below(298);
-	const fitting = byCalls.filter((kind) => kind.on.includes((world.families[family] as Family).class));
+	const fitting = byCalls.filter((kind) =>
+		kind.on.includes((world.families[family] as Family).class)
+	);
 	const kind = random.early(fitting).id;
 	const state = random.chance(0.82) ? 'shelved' : random.early(STATES);
 	return {
@@ -99,7 +114,9 @@ function partOf(random: Random, world: Catalogue, shop: WorldShop, id: number): 
 		bin: state === 'shelved' ? random.below(shop.bins.length) : null,
 		note: noteOf(random, world),
 		pulled: donor ? donor.takenIn + random.below(60) * DAY : TODAY - random.below(900) * DAY,
-		proved: random.chance(0.3) ? random.pick(['look-over', 'seen running', 'bench test cold', 'bench test hot']) : null
+		proved: random.chance(0.3)
+			? random.pick(['look-over', 'seen running', 'bench test cold', 'bench test hot'])
+			: null
 	};
 }
 
@@ -109,7 +126,9 @@ export function makeWorld(catalogue: Catalogue, sizes: readonly number[], seed: 
 	let donorId = 0;
 	const shops = sizes.map((size, at): WorldShop => {
 		const count = Math.max(2, Math.round(size * 0.06));
-		const donors = Array.from({ length: count }, (_, n) => donorOf(random, at + 1, n + 1, ++donorId));
+		const donors = Array.from({ length: count }, (_, n) =>
+			donorOf(random, at + 1, n + 1, ++donorId)
+		);
 		const bins = Array.from({ length: Math.max(3, Math.round(size / 28)) }, (_, n) => binName(n));
 		return { id: at + 1, size, donors, parts: [], bins };
 	});
@@ -122,5 +141,6 @@ export function makeWorld(catalogue: Catalogue, sizes: readonly number[], seed: 
 	return { catalogue, shops };
 }
 
-export const isHere = (part: WorldPart): boolean => part.state !== 'out' && part.state !== 'scrapped';
+export const isHere = (part: WorldPart): boolean =>
+	part.state !== 'out' && part.state !== 'scrapped';
 export const nameOf = (id: string): string => findKind(id)!.name;

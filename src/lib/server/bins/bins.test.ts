@@ -99,6 +99,19 @@ describe('a bin', () => {
 	});
 });
 
+describe('a place', () => {
+	it('is found by its address however it is written, when that means one place', async () => {
+		const { ours } = await testShops();
+		await addBin(ours.ctx, bin('N2-1'));
+		await addBin(ours.ctx, bin('N21-3'));
+		await addBin(ours.ctx, bin('N2-13'));
+		for (const typed of ['n2-1', 'N 2 1', 'n21']) {
+			expect((await getBin(ours.ctx, typed)).address).toBe('N2-1');
+		}
+		expect(await caught(getBin(ours.ctx, 'n213'))).toBeInstanceOf(NotFound);
+	});
+});
+
 describe('editing', () => {
 	it('from an old version is refused with both values', async () => {
 		const { version } = await addBin(ours.ctx, bin('E1-1', { purpose: 'coils' }));

@@ -69,14 +69,18 @@ export async function findPlace(
 	const live = and(eq(bin.shopId, ctx.shopId), isNull(bin.retiredAt));
 	const by = async (which: ReturnType<typeof eq>) => {
 		const asked = tx.select().from(bin).where(and(live, which));
-		const [row] = await (lock ? asked.for(lock) : asked);
-		return row ?? null;
+		const [row, other] = await (lock ? asked.for(lock) : asked);
+		return row && !other ? row : null;
 	};
 	const byAddress = await by(eq(sql`upper(${bin.address})`, readAddress(typed).address));
 	if (byAddress) return byAddress;
 	const read = readTag(typed);
-	return 'tag' in read ? by(eq(bin.tag, read.tag)) : null;
+	const byTag = 'tag' in read ? await by(eq(bin.tag, read.tag)) : null;
+	return byTag ?? by(eq(bareAddress, typed.toUpperCase().replace(/[^0-9A-Z]/g, '')));
 }
+
+/** n21 is N2-1 too, where nothing else goes by it. */
+const bareAddress = sql`upper(regexp_replace(${bin.address}, '[^0-9A-Za-z]', '', 'g'))`;
 
 /** The place for failed, doubtful or returned parts, if the shop has named one. */
 export async function redBin(tx: Tx, ctx: Context): Promise<BinRow | null> {

@@ -6,8 +6,18 @@ import type { Tx } from '../db';
 import type { Answer } from './answer';
 import { asked } from './tables';
 
-const isNarrowed = ({ kind, grade, bin, state, donor, engine, price, proof, same, cursor }: FindQuery) =>
-	[kind, grade, bin, state, donor, engine, price, proof, same, cursor].some(Boolean);
+const isNarrowed = ({
+	kind,
+	grade,
+	bin,
+	state,
+	donor,
+	engine,
+	price,
+	proof,
+	same,
+	cursor
+}: FindQuery) => [kind, grade, bin, state, donor, engine, price, proof, same, cursor].some(Boolean);
 
 /** A search for one kind that ends in nothing counts as a call: one for each person, kind and day. */
 export async function countAsked(
@@ -19,7 +29,8 @@ export async function countAsked(
 ): Promise<void> {
 	const [kind] = plan.kinds;
 	const inVain = total === 0 || level === 3;
-	if (!inVain || !kind || plan.kinds.length > 1 || plan.donorNumber !== null || isNarrowed(query)) return;
+	if (!inVain || !kind || plan.kinds.length > 1 || plan.donorNumber !== null || isNarrowed(query))
+		return;
 	await tx
 		.insert(asked)
 		.values({

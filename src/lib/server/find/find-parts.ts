@@ -7,6 +7,7 @@ import { findKind } from '$lib/trade';
 import { sql } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
+import { recentFigures } from '../parts';
 import type { Answer } from './answer';
 import { countAsked } from './asked';
 import { facetsOf } from './facets';
@@ -20,7 +21,9 @@ import { askedKinds, donorsWith, type OpenDonor } from './still-on';
 async function planOf(tx: Tx, ctx: Context, typed: string): Promise<Plan> {
 	const known = wordsRead(ctx);
 	const plan = readSearch(typed, known);
-	const strange = plan.literally.some(({ exact: [word = ''] }) => /^\p{L}{3,}$/u.test(word) && !known.has(word));
+	const strange = plan.literally.some(
+		({ exact: [word = ''] }) => /^\p{L}{3,}$/u.test(word) && !known.has(word)
+	);
 	return strange ? readSearch(typed, await wordsOfShop(tx, ctx)) : plan;
 }
 
@@ -49,7 +52,9 @@ function saidInWords(plan: Plan, query: FindQuery): Found['said'] {
 	const { price, proof, grade } = saidFilters(plan, query);
 	const whole = (cents: number | null) => (cents === null ? '' : `${cents / 100}`);
 	return [
-		...(price ? [{ name: 'price' as const, value: `${whole(price.low)}-${whole(price.high)}` }] : []),
+		...(price
+			? [{ name: 'price' as const, value: `${whole(price.low)}-${whole(price.high)}` }]
+			: []),
 		...(proof ? [{ name: 'proof' as const, value: proof }] : []),
 		...(grade ? [{ name: 'grade' as const, value: grade }] : [])
 	];
@@ -68,7 +73,7 @@ export const findParts = (ctx: Context, query: FindQuery): Promise<Found> =>
 	inShop(ctx, async (tx, ctx) => {
 		const plan = await planOf(tx, ctx, query.q ?? '');
 		const { answer, donors } = await look(tx, ctx, plan, query);
-		const policy = withDefaults(answer.shop.figures ?? {});
+		const policy = await recentFigures(ctx, withDefaults(answer.shop.figures ?? {}));
 		const said = { plan, policy, now: ctx.now, ...answer.shop };
 		const hits = (answer.page ?? []).slice(0, query.limit);
 		const isMore = (answer.page ?? []).length > query.limit;

@@ -2,9 +2,9 @@ import { sayNumber } from '$lib/donors/reference';
 import type { Plan } from '$lib/find/plan';
 import { reasonFor } from '$lib/find/reason';
 import type { FoundItem } from '$lib/find/view';
+import type { ShopFigures } from '$lib/parts/learned-view';
 import { verdictOf } from '$lib/parts/verdict';
 import type { VerdictSubject } from '$lib/parts/verdict-view';
-import type { Policy } from '$lib/people/policy';
 import type { Season } from '$lib/people/settings';
 import { photoLinks } from '$lib/photos/links';
 import { isStale } from '$lib/prices/stale';
@@ -15,7 +15,7 @@ import type { FoundPart, Hit } from './answer';
 export interface Said {
 	plan: Plan;
 	slug: string;
-	policy: Policy;
+	policy: ShopFigures;
 	season: Season;
 	now: Date;
 }
@@ -33,12 +33,16 @@ function subjectOf(part: FoundPart, { policy, now }: Said): VerdictSubject {
 		proofs: part.proofs ?? [],
 		place: before + 1,
 		have: others + (part.stands ? 1 : 0),
-		price: part.price && { ...part.price, stale: isStale(part.price.seenOn, now, policy.staleDays) },
+		price: part.price && {
+			...part.price,
+			stale: isStale(part.price.seenOn, now, policy.staleDays)
+		},
 		massGrams: part.mass,
 		litres: null,
 		bin: { yearlyCostCents: part.binCost, litres: part.binLitres },
 		stillOn: false,
 		family: policy.families[part.engineKey] ?? 'some',
+		engineKey: part.engineKey,
 		waiting: false
 	};
 }

@@ -53,9 +53,7 @@ function mayBeStock(kind: string, { cause, secondCause }: OpenDonor): boolean {
 
 function stillOn(donor: OpenDonor, asked: readonly Kind[]): StillOnDonor | null {
 	const present = left(donor);
-	const first = asked.find(
-		({ id }) => present.includes(id) && mayBeStock(id, donor)
-	);
+	const first = asked.find(({ id }) => present.includes(id) && mayBeStock(id, donor));
 	if (!first) return null;
 	return {
 		number: sayNumber(donor.number),
@@ -68,10 +66,7 @@ function stillOn(donor: OpenDonor, asked: readonly Kind[]): StillOnDonor | null 
 }
 
 /** Donors not yet taken apart that still carry one of the kinds asked for, the quickest to pull first. */
-export function donorsWith(
-	open: readonly OpenDonor[],
-	asked: readonly Kind[]
-): StillOnDonor[] {
+export function donorsWith(open: readonly OpenDonor[], asked: readonly Kind[]): StillOnDonor[] {
 	const named = open.filter((donor) => donor.named);
 	const found = (named.length > 0 ? named : open).map((donor) => stillOn(donor, asked));
 	return found

@@ -50,7 +50,9 @@ export const foundBy = pgTable(
 		primaryKey({ columns: [t.shopId, t.partId] }),
 		index('found_by_bin').on(t.shopId, t.binId),
 		index('found_by_donor').on(t.shopId, t.donorId),
-		index('found_by_engine').on(t.shopId, t.engineKey, t.kind),
+		index('found_by_queue').on(
+			...([t.shopId, t.engineKey, t.kind, t.stands, t.gradeNo, t.aged, t.partId, t.binId] as const)
+		),
 		foreignKey({ columns: [t.shopId, t.partId], foreignColumns: [part.shopId, part.id] }).onDelete(
 			'cascade'
 		)
@@ -63,11 +65,14 @@ export const foundNumber = pgTable(
 	{
 		shopId: shopColumn().references(() => shop.id),
 		key: text('key').notNull(),
-		partId: refColumn('part_id').notNull()
+		partId: refColumn('part_id').notNull(),
+		kind: text('kind').notNull().default(''),
+		engineKey: text('engine_key').notNull().default('')
 	},
 	(t) => [
 		primaryKey({ columns: [t.shopId, t.key, t.partId] }),
 		index('found_number_part').on(t.shopId, t.partId),
+		index('found_number_like').on(t.shopId, t.key, t.kind, t.engineKey, t.partId),
 		foreignKey({ columns: [t.shopId, t.partId], foreignColumns: [part.shopId, part.id] }).onDelete(
 			'cascade'
 		)

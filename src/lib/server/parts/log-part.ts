@@ -5,8 +5,9 @@ import { kind } from '$lib/trade';
 import { Refused } from '$lib/refusal';
 import type { Context } from '../context';
 import type { Tx } from '../db';
+import { getPolicy } from '../people';
 import { mintTag } from '../tags';
-import { chanceOn } from './chance-on';
+import { chanceBy } from './chance-on';
 import { insertPart, type Origin } from './insert-part';
 import { hangKept } from './photo';
 import { placeNamed, redPlace, type Place } from './place';
@@ -22,7 +23,7 @@ export interface Logged extends Done {
 /** Never-reuse kinds and ruined ones become no stock; safety kinds only with every tick of their list. */
 async function askRules(ctx: Context, input: Pull, from: Origin['donor']): Promise<void> {
 	if (input.scrapped) return;
-	const { never } = await chanceOn(ctx, input.kind, from);
+	const { never } = chanceBy(await getPolicy(ctx), input.kind, from);
 	if (never)
 		throw new Refused('gate', `${never} It can be logged as scrapped or destroyed.`, 'kind');
 	const left = unticked(input.kind, input.checklist ?? []);

@@ -42,7 +42,7 @@ export async function placeNamed(tx: Tx, ctx: Context, typed: string): Promise<P
 	if (place) return place;
 	throw new Refused(
 		'bad input',
-		`There is no bin ${typed.trim()}. Type an address like K3-1, or scan the tag of a bin or a box.`,
+		`There is no bin ${typed.trim()}. Type an address like K3-1, or the tag of a bin or a box.`,
 		'bin'
 	);
 }

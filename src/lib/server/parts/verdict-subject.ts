@@ -48,6 +48,7 @@ export function subjectOf(
 		bin: null,
 		stillOn: true,
 		family: policy.families[asked.engineKey] ?? 'some',
+		engineKey: asked.engineKey,
 		waiting: false
 	};
 }

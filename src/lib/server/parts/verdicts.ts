@@ -1,24 +1,30 @@
+import type { ShopFigures } from '$lib/parts/learned-view';
 import { verdictOf } from '$lib/parts/verdict';
 import type { Verdict, VerdictSubject } from '$lib/parts/verdict-view';
-import type { Policy } from '$lib/people/policy';
 import { may } from '$lib/people/role';
 import type { Season } from '$lib/people/settings';
 import { NotFound } from '$lib/refusal';
 import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import { donor } from '../donors/tables';
-import { getPolicy, getShop } from '../people';
+import { getShop } from '../people';
 import { pricesFor } from '../prices';
+import { figuresFor } from './figures';
 import { proofsOf, queued, queueFor, rowsOf } from './verdict-rows';
 import { priceOf, subjectOf } from './verdict-subject';
 
-interface Shop {
-	policy: Policy;
+export interface Shop {
+	/** With what the history taught. */
+	policy: ShopFigures;
 	season: Season;
 }
 
-async function shopFigures(ctx: Context): Promise<Shop> {
-	const policy = await getPolicy(ctx);
+/** What verdicts on these kinds are counted with; null: on any. */
+export async function shopFigures(
+	ctx: Context,
+	kinds: readonly string[] | null = null
+): Promise<Shop> {
+	const policy = await figuresFor(ctx, kinds);
 	return { policy, season: (await getShop(ctx)).season };
 }
 
@@ -35,8 +41,9 @@ export const partVerdicts = (
 	inShop(ctx, async (tx, ctx) => {
 		const found = new Map<number, Verdict>();
 		if (partIds.length === 0) return found;
-		const { policy, season } = await shopFigures(ctx);
 		const rows = await rowsOf(tx, ctx, partIds);
+		const kinds = [...new Set(rows.map(({ kind }) => kind))];
+		const { policy, season } = await shopFigures(ctx, kinds);
 		const proofs = await proofsOf(tx, ctx, partIds);
 		const queue = (await queueFor(tx, ctx, rows)).map(queued);
 		const prices = await pricesFor(
@@ -60,19 +67,19 @@ export const partVerdicts = (
 
 const LAST = Number.MAX_SAFE_INTEGER;
 
-/** The verdicts on kinds that are still on a donor, as if each were pulled now, untested. */
-export const kindVerdicts = (
+/** What verdicts on kinds still on a donor are made of: each as if pulled now, untested. */
+export const kindSubjects = (
 	ctx: Context,
 	donorId: number,
 	kindIds: readonly string[]
-): Promise<Map<string, Verdict>> =>
+): Promise<Shop & { subjects: Map<string, VerdictSubject> }> =>
 	inShop(ctx, async (tx, ctx) => {
 		const [from] = await tx
 			.select()
 			.from(donor)
 			.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, donorId)));
 		if (!from) throw new NotFound();
-		const { policy, season } = await shopFigures(ctx);
+		const { policy, season } = await shopFigures(ctx, kindIds);
 		const { engineKey, cause, secondCause, sureness } = from;
 		const asked = kindIds.map((kind) => ({ key: kind, kind, engineKey, numberKeys: [] }));
 		const queue = (await queueFor(tx, ctx, asked)).map(queued);
@@ -84,14 +91,24 @@ export const kindVerdicts = (
 			state: 'pulled',
 			inRedBin: false
 		} as const;
-		return new Map(
-			asked.map((one) => {
-				const price = priceOf(prices.get(one.key), ctx, policy);
-				const from = { ...one, ...place, cause, secondCause, sureness };
-				const subject = subjectOf(from, queue, price, policy);
-				// it is not off yet, so it does not count among those the shop has
-				const verdict = verdictOf({ ...subject, have: subject.have - 1 }, policy, season);
-				return [one.kind, shownTo(ctx, verdict)];
-			})
-		);
+		const subjects = asked.map((one): [string, VerdictSubject] => {
+			const price = priceOf(prices.get(one.key), ctx, policy);
+			const from = { ...one, ...place, cause, secondCause, sureness };
+			const subject = subjectOf(from, queue, price, policy);
+			// it is not off yet, so it does not count among those the shop has
+			return [one.kind, { ...subject, have: subject.have - 1 }];
+		});
+		return { policy, season, subjects: new Map(subjects) };
 	});
+
+/** The verdicts on kinds that are still on a donor, as if each were pulled now, untested. */
+export async function kindVerdicts(
+	ctx: Context,
+	donorId: number,
+	kindIds: readonly string[]
+): Promise<Map<string, Verdict>> {
+	const { policy, season, subjects } = await kindSubjects(ctx, donorId, kindIds);
+	return new Map(
+		[...subjects].map(([kind, subject]) => [kind, shownTo(ctx, verdictOf(subject, policy, season))])
+	);
+}

@@ -5,5 +5,6 @@ export { editPrice } from './edit';
 export { putPrice } from './put';
 export { findPrice, getPrice, listPrices, pricedEngines } from './queries';
 export type { PriceFilter } from './filter';
+export { listReplaced, replaceNumber } from './replaced';
 export { listRemoved, putBackPrice, removePrice } from './remove';
 export { pricesFor, type PriceAsk, type PriceRow } from './prices-for';

@@ -62,6 +62,9 @@ export const supersession = pgTable(
 		uniqueIndex('supersession_of').on(t.shopId, t.oldKey, t.newKey),
 		index('supersession_new').on(t.shopId, t.newKey),
 		foreignKey({ columns: [t.shopId, t.memberId], foreignColumns: [member.shopId, member.id] }),
-		check('supersession_keys', sql`${t.oldKey} <> '' and ${t.newKey} <> '' and ${t.oldKey} <> ${t.newKey}`)
+		check(
+			'supersession_keys',
+			sql`${t.oldKey} <> '' and ${t.newKey} <> '' and ${t.oldKey} <> ${t.newKey}`
+		)
 	]
 );

@@ -5,13 +5,14 @@ import {
 	type RouteConfig
 } from '@asteasolutions/zod-to-openapi';
 import { Fault } from './answers';
+import { donorWorth } from './donor-worth';
 import { donors } from './donors';
 import { parts } from './parts';
 import { z, type Row } from './row';
 import { shelf } from './shelf';
 import { worth } from './worth';
 
-export const rows: readonly Row[] = [...donors, ...parts, ...shelf, ...worth];
+export const rows: readonly Row[] = [...donors, ...donorWorth, ...parts, ...shelf, ...worth];
 
 const PARAMS: Record<string, string> = {
 	shop: 'Slug of the shop',

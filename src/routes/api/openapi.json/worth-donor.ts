@@ -23,7 +23,7 @@ const PullPlan = z
 	})
 	.openapi('PullPlanFigures');
 
-const Decide = z
+export const Decide = z
 	.object({
 		fixChance: share,
 		fixedPriceCents: amount,
@@ -65,25 +65,37 @@ const Carry = z
 /** What the calls about a donor and its costs take. */
 export const donorFigures = [PullPlan, Decide, Allocate, Carry];
 
-const step = { id: z.string(), minutes: z.number() };
+const left = { id: z.string(), minutes: z.number() };
+export const PlannedStep = z.object({
+	...left,
+	keep: z.boolean(),
+	runningMinutes: z.number(),
+	runningCents: z.int()
+});
+export const PlannedBelow = z.object({ ...left, totalCents: z.int() });
+export const Planned = z.object({
+	order: z.array(PlannedStep),
+	minutes: z.number(),
+	totalCents: z.int(),
+	below: z.array(PlannedBelow)
+});
+
 const choice = z.enum(['fix', 'park', 'strip', 'whole', 'scrap']);
+export const Tip = z.object({
+	input: z.string(),
+	at: z.number(),
+	choice,
+	when: z.enum(['above', 'below'])
+});
+export const Decided = z.object({
+	choices: z.array(z.object({ choice, cents: z.int() })),
+	tips: z.array(Tip)
+});
 
 /** And what they give. */
 export const donorAnswers = [
-	z.object({
-		order: z.array(
-			z.object({ ...step, keep: z.boolean(), runningMinutes: z.number(), runningCents: z.int() })
-		),
-		minutes: z.number(),
-		totalCents: z.int(),
-		below: z.array(z.object({ ...step, totalCents: z.int() }))
-	}),
-	z.object({
-		choices: z.array(z.object({ choice, cents: z.int() })),
-		tips: z.array(
-			z.object({ input: z.string(), at: z.number(), choice, when: z.enum(['above', 'below']) })
-		)
-	}),
+	Planned,
+	Decided,
 	z.object({
 		shares: z.array(z.object({ id: z.string(), cents: z.int() })),
 		lossCents: z.int(),

@@ -9,6 +9,7 @@ import {
 	policyOf
 } from '$lib/people/policy-input';
 import { action, editPolicy, getPolicyRow, getShop, page, setSeason } from '$lib/server/people';
+import { whatItTaught } from '$lib/server/parts';
 import { pricedEngines } from '$lib/server/prices';
 import { isKindId } from '$lib/trade';
 
@@ -20,6 +21,7 @@ export const load = page('see costs', async (ctx, { url }) => {
 		version,
 		kind: isKindId(kind) ? kind : null,
 		engines: await pricedEngines(ctx),
+		taught: await whatItTaught(ctx),
 		wide: true
 	};
 });

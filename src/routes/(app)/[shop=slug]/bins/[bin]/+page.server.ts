@@ -1,12 +1,17 @@
 import { BinEditForm } from '$lib/bins/input';
 import { editBin, getBin, retireBin } from '$lib/server/bins';
+import { firstPhotos } from '$lib/server/parts';
 import { action, page } from '$lib/server/people';
 import { z } from 'zod';
 import type { PageServerLoadEvent, RequestEvent } from './$types';
 
 export const load = page('see', async (ctx, { params }: PageServerLoadEvent) => {
 	const bin = await getBin(ctx, params.bin);
-	return { bin, back: { href: `/${params.shop}/bins`, label: 'Bins' }, short: bin.tag };
+	const photos = await firstPhotos(
+		ctx,
+		bin.contents.map((part) => part.tag)
+	);
+	return { bin, photos, back: { href: `/${params.shop}/bins`, label: 'Bins' }, short: bin.tag };
 });
 
 export const actions = {

@@ -9,12 +9,13 @@ import {
 } from '$lib/donors/input';
 import { donorOptions } from '$lib/donors/options';
 import * as donors from '$lib/server/donors';
+import { firstPhotos } from '$lib/server/parts';
 import { action, page } from '$lib/server/people';
 import { actionWithPhotos } from '$lib/server/photos';
-import { z } from 'zod';
 import type { PageServerLoadEvent, RequestEvent } from './$types';
 import { back, moved } from './moves';
 import { addPhotos, putBackPhoto, removePhoto } from './photos';
+import { donorWorth } from './worth';
 
 export const load = page('see', async (ctx, { params, url }: PageServerLoadEvent) => {
 	const donor = await donors.getDonor(ctx, params.donor);
@@ -23,6 +24,11 @@ export const load = page('see', async (ctx, { params, url }: PageServerLoadEvent
 		today: await donors.todayIn(ctx),
 		makers: await donors.listMakers(ctx),
 		...donorOptions,
+		...(await donorWorth(ctx, donor, url)),
+		partPhotos: await firstPhotos(
+			ctx,
+			donor.parts.map((part) => part.tag)
+		),
 		removed: url.searchParams.get('removed'),
 		back: { href: `/${params.shop}/donors`, label: 'Donors' },
 		short: `${donor.number} · ${donor.tag}`
@@ -53,7 +59,7 @@ export const actions = {
 		await donors.editDonor(ctx, event.params.donor, input);
 		return back(event, 'Saved');
 	}),
-	box: action('work', z.object({}), async (ctx, _input, event: RequestEvent) => {
+	box: action('work', MoveInput, async (ctx, _input, event: RequestEvent) => {
 		const { tag } = await donors.addBox(ctx, event.params.donor);
 		return back(event, `Another box: ${tag}`);
 	})

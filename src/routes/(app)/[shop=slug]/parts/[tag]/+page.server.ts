@@ -1,11 +1,13 @@
 import { Nothing } from '$lib/parts/input';
 import { MOVES, whyNot, type Move } from '$lib/parts/state';
 import type { PartView } from '$lib/parts/view';
-import { foundPart, freePart, getPart, hangPhoto, missPart } from '$lib/server/parts';
+import { foundPart, freePart, getPart, hangPhoto, listFits, missPart } from '$lib/server/parts';
+import { listReplaced } from '$lib/server/prices';
 import { action, page } from '$lib/server/people';
 import { actionWithPhotos } from '$lib/server/photos';
 import { causeSaid, isCauseId, whyChance } from '$lib/trade';
 import { plural } from '$lib/format';
+import { fitActions } from './fits';
 import { after } from './sheet';
 import type { PageServerLoadEvent, RequestEvent } from './$types';
 
@@ -18,6 +20,8 @@ export const load = page('see', async (ctx, { params }: PageServerLoadEvent) => 
 		part,
 		open: ASKED.filter((move) => whyNot(move, part) === null),
 		causes: causesOf(part),
+		fits: await listFits(ctx, part.tag),
+		replaced: await listReplaced(ctx, part.numbers),
 		back: { href: `/${params.shop}/parts`, label: 'Find' },
 		short: part.tag
 	};
@@ -30,6 +34,7 @@ const causesOf = ({ kind, donorOf }: PartView) =>
 	);
 
 export const actions = {
+	...fitActions,
 	free: action('hold', Nothing, async (ctx, _input, event: RequestEvent) =>
 		after(event, await freePart(ctx, event.params.tag), 'Freed')
 	),

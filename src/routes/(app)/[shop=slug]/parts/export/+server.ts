@@ -4,7 +4,7 @@ import { read } from '$lib/server/people';
 
 export const GET = read(
 	'see',
-	(ctx, { url }) =>
+	async (ctx, { url }) =>
 		new Response(exportParts(ctx, readQuestion(url.searchParams)), {
 			headers: {
 				'Content-Type': 'text/csv; charset=utf-8',

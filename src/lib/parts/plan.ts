@@ -1,0 +1,121 @@
+import type { Policy } from '$lib/people/policy';
+import type { Season } from '$lib/people/settings';
+import { kind, standsBefore, type EngineClass } from '$lib/trade';
+import { pullPlan, type PullPart, type PullStep } from '$lib/worth';
+import { figuresOf } from './kind-figures';
+import type { PlanBelow, PlanStep, PlanView } from './plan-view';
+import { verdictOf } from './verdict';
+import type { VerdictPrice, VerdictSubject } from './verdict-view';
+
+const MACHINE = 'Machine parts (common)';
+/** Engines that are taken in with the machine around them. */
+const WITH_MACHINE: readonly EngineClass[] = ['SA', 'TR', 'GE', 'PW'];
+
+/**
+ * The kinds to plan with: an engine is taken in without the mower or the snow thrower around it, so
+ * parts of those count only where the shop has a price for them on it.
+ */
+export const plannable = (subjects: readonly VerdictSubject[], engineClass: EngineClass) =>
+	subjects.filter(
+		(one) =>
+			one.price !== null || kind(one.kind).system !== MACHINE || WITH_MACHINE.includes(engineClass)
+	);
+
+/** The price in the middle of what new ones of a kind cost; such bands are wide, so by ratio. */
+function middlePrice(kindId: string): VerdictPrice {
+	const { newLowCents, newHighCents } = kind(kindId);
+	return {
+		newCents: Math.round(Math.sqrt(newLowCents * newHighCents)),
+		copyCents: null,
+		source: 'middle of its kind',
+		seenOn: '2000-01-01',
+		stale: false
+	};
+}
+
+/** The same with a price, if need be the middle of its kind's. */
+export const roughlyPriced = (subject: VerdictSubject) => ({
+	...subject,
+	price: subject.price ?? middlePrice(subject.kind)
+});
+
+/** A part once it is off: its gain before any minutes for pulling it. */
+export interface PlanPart {
+	id: string;
+	gainCents: number;
+	/** Counted at the middle of what its kind costs: it has no price yet. */
+	rough: boolean;
+	never: boolean;
+}
+
+/** What keeping a kind of this donor is worth once it is off; one without a price counts roughly. */
+export function planPart(subject: VerdictSubject, policy: Policy, season: Season): PlanPart {
+	const off = { ...subject, stillOn: false };
+	const { verdict } = verdictOf(off, policy, season);
+	const id = subject.kind;
+	if (verdict === 'never') return { id, gainCents: 0, rough: false, never: true };
+	const { gainCents } = verdictOf(roughlyPriced(off), policy, season);
+	return { id, gainCents: gainCents ?? 0, rough: subject.price === null, never: false };
+}
+
+function toPull({ id, gainCents }: PlanPart, policy: Policy): PullPart {
+	const { behind, partOf, ruins } = kind(id);
+	const { pullMinutes: minutes } = figuresOf(id, policy);
+	return { id, behind, partOf, ruins, minutes, keepMinutes: policy.keepMinutes, gainCents };
+}
+
+const nameOf = (id: string) => kind(id).name;
+
+const goTogether = (one: string, other: string) =>
+	kind(one).partOf === other || kind(other).partOf === one;
+
+/** What a part that comes off without being kept is taken off for. */
+function whyOff(part: PlanPart, order: readonly PullStep[], there: readonly string[]) {
+	const at = order.findIndex(({ id }) => id === part.id);
+	const kept = order.filter(({ keep }) => keep).map(({ id }) => id);
+	const opens = order
+		.slice(at + 1)
+		.filter(({ id, keep }) => keep && standsBefore(id, there).includes(part.id))
+		.map(({ id }) => nameOf(id));
+	const spoilers = order.map(({ id }) => id).filter((id) => kind(id).ruins?.includes(part.id));
+	const instead = kept.filter((id) => goTogether(id, part.id));
+	const givenUpFor = part.gainCents > 0 ? [...spoilers, ...instead].map(nameOf) : [];
+	return { opens, givenUpFor };
+}
+
+/**
+ * The pull plan of a donor for the minutes at hand, in words for people.
+ * In: the kinds still on it as if each were pulled now, the shop's policy, the season, and the
+ * minutes (none: no limit). Out: what to take off in working order with running minutes and cents,
+ * and what stays on below the stop line with what adding it would take and bring.
+ */
+export function planOf(
+	subjects: readonly VerdictSubject[],
+	policy: Policy,
+	season: Season,
+	minutes: number | null = null
+): PlanView {
+	const parts = subjects.map((subject) => planPart(subject, policy, season));
+	const known = new Map(parts.map((part) => [part.id, part]));
+	const there = parts.map(({ id }) => id);
+	const plan = pullPlan({
+		parts: parts.map((part) => toPull(part, policy)),
+		minutes,
+		labourNow: policy.labourHourCents[season] / 60
+	});
+	const kept = plan.order.filter(({ keep }) => keep).map(({ id }) => id);
+	const order = plan.order.map((step): PlanStep => {
+		const part = known.get(step.id)!;
+		const why = step.keep ? { opens: [], givenUpFor: [] } : whyOff(part, plan.order, there);
+		return { ...step, ...why, kindName: nameOf(step.id), rough: step.keep && part.rough };
+	});
+	const below = plan.below.flatMap((left): PlanBelow[] => {
+		const part = known.get(left.id)!;
+		if (part.never) return [];
+		const whole = kept.find((id) => kind(left.id).partOf === id);
+		const goesWith = whole === undefined ? null : nameOf(whole);
+		return [{ ...left, kindName: nameOf(left.id), rough: part.rough, goesWith }];
+	});
+	const unpriced = parts.filter(({ rough }) => rough).length;
+	return { ...plan, minutesAtHand: minutes, order, below, unpriced };
+}
