@@ -440,20 +440,12 @@ declare
 	narrow boolean;
 	onlykinds boolean;
 	everything boolean;
-	own json;
-	policy float8[];
+	policy float8[] := ask.policy;
 	v_red bigint[];
 	v_ranks jsonb;
 	v_fits jsonb;
 	answer json;
 begin
-select figures from policy x where x.shop_id = shop into own;
-policy := array[
-	coalesce((own->'shares'->>'clean used')::float8, ask.policy[1]), coalesce((own->'shares'->>'good used')::float8, ask.policy[2]),
-	coalesce((own->'shares'->>'usable')::float8, ask.policy[3]), coalesce((own->'shares'->>'untested')::float8, ask.policy[4]),
-	coalesce((own->'shares'->>'core')::float8, ask.policy[5]), coalesce((own->>'copyCap')::float8, ask.policy[6]),
-	coalesce((own->>'stepLimitCents')::float8, ask.policy[7]), coalesce((own->>'stepLowCents')::float8, ask.policy[8]),
-	coalesce((own->>'stepHighCents')::float8, ask.policy[9])];
 v_red := array(select id from bin where shop_id = shop and red);
 if ask.place is not null then
 	v_bins := array(select b.id from bin b where b.shop_id = shop and (upper(b.address) = ask.place or upper(b.address) like ask.place || '-%'));
@@ -725,8 +717,7 @@ select json_build_object(
 			and (case when f_stands is null then stands < 5 else stands = f_stands end) and proof_no between f_proof_low and f_proof_high
 		group by 1 order by 2 desc, 1 limit 12) c),
 	'page', (select json_agg(w.said order by w.ord, w.id) from worded w where not w.is_gone),
-	'gone', (select json_agg(w.said order by w.ord desc) from worded w where w.is_gone),
-	'shop', (select json_build_object('slug', s.slug, 'season', s.season, 'timeZone', s.time_zone, 'figures', own) from shop s where s.id = shop)
+	'gone', (select json_agg(w.said order by w.ord desc) from worded w where w.is_gone)
 ) into answer;
 return answer;
 end $f$;

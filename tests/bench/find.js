@@ -62,7 +62,7 @@ const vite = await createServer({
 	logLevel: 'error',
 	optimizeDeps: { noDiscovery: true, include: [] }
 });
-let missed = 1;
+let missed;
 try {
 	const { env, adminUrl, secrets } = await services();
 	if (!adminUrl || !secrets) throw new Error('The bench runs on services of its own');

@@ -150,7 +150,7 @@ export const DOORS: Record<string, Door> = {
 		parts.noteFit(ctx, part, { engine: 'Pellwyn 9', fits: 'yes', because: '', ways: 'one' })
 	),
 	getPart: on('see', (ctx, { part }) => parts.getPart(ctx, part)),
-	firstPhotos: off('see', (ctx, { tag }) => parts.firstPhotos(ctx, [tag])),
+	firstPhotos: off('see', (ctx, refs) => parts.firstPhotos(ctx, [refs.part])),
 	partsByIds: off('see', (ctx, { partId }) => parts.partsByIds(ctx, [partId])),
 	partVerdicts: off('see', async (ctx, { partId }) => [
 		...(await parts.partVerdicts(ctx, [partId]))

@@ -9,6 +9,7 @@ export interface Shown {
 	bare: string;
 	donor: string;
 	whole: string;
+	parked: string;
 	bench: string;
 	bin: string;
 	price: string;
@@ -50,6 +51,7 @@ export async function findShown(page: Page): Promise<Shown> {
 		scrapped: await first('scrapped'),
 		donor: await donors('stripped'),
 		whole: await donors('whole'),
+		parked: await donors('parked'),
 		bench: await donors('on the bench'),
 		price: price?.split('/').at(-1) ?? ''
 	};
@@ -63,7 +65,14 @@ export const pagesOf = (one: Shown): string[] =>
 		...[`parts/${one.out}`, `parts/${one.scrapped}`, `parts/${one.part}/edit`],
 		...['hold', 'move', 'use', 'prove', 'scrap'].map((verb) => `parts/${one.part}/${verb}`),
 		...[`parts/${one.out}/back`, 'donors', 'donors/new'],
-		...[`donors/${one.donor}`, `donors/${one.whole}`, `donors/${one.bench}`],
+		...[
+			`donors/${one.donor}`,
+			`donors/${one.whole}`,
+			`donors/${one.parked}`,
+			`donors/${one.bench}`
+		],
+		...['worth/calculator', 'worth/calculator?kind=starter12&new=136&copy=58&have=2'],
+		...[`donors/${one.bench}?minutes=30`, `donors/${one.bench}/log?minutes=15`],
 		...[`donors/${one.bench}/log`, `donors/${one.bench}/log?kind=flywheel`],
 		...['bins', 'bins/new', `bins/${one.bin}`, 'prices', 'prices/new', `prices/${one.price}`],
 		...['people', 'people/shop', 'worth?kind=flywheel', 'undo', `tags/${one.part}`]

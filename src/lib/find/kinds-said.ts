@@ -8,6 +8,8 @@ export interface KindsSaid {
 	kinds: string[];
 	nearKinds: string[];
 	ask: string[];
+	/** The kinds were guessed from pieces of names, and the shop has written all of the words itself. */
+	guessed: boolean;
 	/** Whether a word only says the kind again, however it is spelt. */
 	saysKind(token: Token): boolean;
 }
@@ -64,7 +66,10 @@ function partly(strong: readonly string[], words: Lexicon): string[] {
 	return best.length <= 8 ? best : [];
 }
 
-function matched(text: string, words: Lexicon): { kinds: string[]; nearKinds: string[] } {
+function matched(
+	text: string,
+	words: Lexicon
+): { kinds: string[]; nearKinds: string[]; guessed?: boolean } {
 	const matches = matchKinds(text);
 	const sure = matches.filter(isSure);
 	if (sure.length > 0)
@@ -73,7 +78,8 @@ function matched(text: string, words: Lexicon): { kinds: string[]; nearKinds: st
 	const near = matchKinds(strong.join(' '));
 	if (near.length > 0) return { kinds: ids(near.slice(0, 1)), nearKinds: ids(near.slice(1)) };
 	const some = partly(strong, words);
-	if (some.length > 0) return { kinds: some, nearKinds: [] };
+	if (some.length > 0)
+		return { kinds: some, nearKinds: [], guessed: wordsOf(text).every((one) => words.has(one)) };
 	const begun = strong.length === 1 && wordsOf(text).length === 1 ? beginning(text) : [];
 	return { kinds: begun, nearKinds: [] };
 }
@@ -93,7 +99,7 @@ function confused(text: string, kinds: string[]): { kinds: string[]; ask: string
 
 /** The kinds that a text names; two that sound alike are told apart by what is said, or asked about. */
 export function readKinds(text: string, words: Lexicon): KindsSaid {
-	const { kinds: found, nearKinds } = matched(text, words);
+	const { kinds: found, nearKinds, guessed = false } = matched(text, words);
 	const { kinds, ask } = confused(text, found);
 	const saying = new Set(kinds.flatMap(kindWords));
 	const near = new WordList();
@@ -103,6 +109,7 @@ export function readKinds(text: string, words: Lexicon): KindsSaid {
 		kinds,
 		nearKinds,
 		ask,
+		guessed,
 		saysKind: ({ said, lexeme, is }) => {
 			if (is === 'size' || is === 'amount') return false;
 			if (saying.has(lexeme) || saying.has(said.replace(/s$/, ''))) return true;

@@ -7,7 +7,11 @@ import { matchKinds } from '../trade';
 export function asNumber(text: string): string | null {
 	const key = numberKey(text);
 	if (key.length < 4 || key.length > 24 || !/\d/.test(text)) return null;
-	if (tokensOf(text).some(({ is }) => is === 'size' || is === 'amount')) return null;
+	// 6469V is no voltage, 12 V is
+	const measures = tokensOf(text).some(
+		({ is, lexeme }) => is === 'size' || (is === 'amount' && !/^\d{4,}(v|amp)$/.test(lexeme))
+	);
+	if (measures) return null;
 	const pieces = text.split(/[^\p{L}\p{N}]+/u).filter(Boolean);
 	const fits = pieces.every((piece) => /\d/.test(piece) || piece.length <= 4);
 	const isKind = pieces.some((piece) => matchKinds(piece).some(({ how }) => how !== 'near'));

@@ -2,6 +2,7 @@ import { engineKey } from '../codes/number';
 import { plainFractions, tokensOf, type Token } from '../donors/lexemes';
 import { readCause, readMonth } from './cause-words';
 import { readKinds } from './kinds-said';
+import { causeNeed, needOf, type Need } from './need';
 import { NO_WORDS, type Lexicon } from './lexicon';
 import { asDoubtful, asNumber, asTags, type Doubtful } from './number';
 import { readFilters, type SaidFilters } from './said-filters';
@@ -25,6 +26,8 @@ export interface Plan {
 	nearKinds: string[];
 	/** Kinds that the same word may mean: somebody has to say which. */
 	ask: string[];
+	/** Kinds guessed from pieces of names: what has every word comes before them. */
+	guessed: boolean;
 	/** Each of these ways to say a thing counts; all things must be there. */
 	needs: Need[];
 	/** The same without the kinds: every word to the letter. */
@@ -36,13 +39,6 @@ export interface Plan {
 	engine: string[];
 	/** Words that are left, as typed. */
 	words: string[];
-}
-
-/** One thing that was said: the lexemes that mean it, and those that come near; a * stands for any ending. */
-export interface Need {
-	said: string;
-	exact: string[];
-	near: string[];
 }
 
 const DONOR = /^d0*([1-9]\d{0,6})$/;
@@ -65,29 +61,6 @@ const piecesOf = (text: string) =>
 		.split(/[^\p{L}\p{N}./-]+/u)
 		.map((token) => token.replace(/^[./-]+|[./-]+$/g, ''))
 		.filter(Boolean);
-
-/** Power by displacement, as small engines are built: 28 to 36 cc for each horsepower. */
-function classOf(hp: number): string[] {
-	const from = Math.ceil(hp * 28);
-	const count = Math.min(Math.floor(hp * 36) - from + 1, 120);
-	return hp > 0 && count > 0 ? Array.from({ length: count }, (_, at) => `${from + at}cc`) : [];
-}
-
-function needOf({ said, is, lexeme, pieces }: Token, last: boolean, words: Lexicon): Need {
-	if (is === 'size') return { said, exact: [lexeme], near: [lexeme] };
-	if (is === 'amount') {
-		const hp = /^([\d.]+)hp$/.exec(lexeme)?.[1];
-		const exact = [lexeme, ...pieces];
-		return { said, exact, near: hp ? [...exact, ...classOf(Number(hp))] : exact };
-	}
-	if (is === 'code') {
-		const exact = /^[1-9]\d{1,3}$/.test(lexeme) ? [lexeme, `${Number(lexeme)}cc`] : [lexeme];
-		return { said, exact, near: lexeme.length > 2 || last ? [...exact, `${lexeme}*`] : exact };
-	}
-	const near = words.has(lexeme) ? [] : words.nearest(lexeme);
-	const open = lexeme.length > 2 || last ? [`${lexeme}*`] : [];
-	return { said, exact: [lexeme], near: [lexeme, ...near, ...open] };
-}
 
 const isWeak = ({ said, lexeme }: Token) => WEAK_WORDS.has(said) || WEAK_WORDS.has(lexeme);
 
@@ -118,7 +91,7 @@ export function readSearch(typed: string, words: Lexicon = NO_WORDS): Plan {
 	const { rest: unfiltered, ...filters } = readFilters(text.toLowerCase());
 	const { month, rest: undated } = readMonth(unfiltered);
 	const { causes, said: caused, rest } = readCause(undated);
-	const { kinds, nearKinds, ask, saysKind } = readKinds(rest, words);
+	const { kinds, nearKinds, ask, guessed, saysKind } = readKinds(rest, words);
 	const { donor, bin } = place(piecesOf(rest), kinds, month !== null);
 	const { tag, near: nearTags } = asTags(text);
 	const doubtful = asDoubtful(text);
@@ -143,6 +116,7 @@ export function readSearch(typed: string, words: Lexicon = NO_WORDS): Plan {
 		kinds,
 		nearKinds,
 		ask,
+		guessed,
 		needs: [...left.map(asNeed), ...around],
 		literally: [
 			...all
@@ -156,11 +130,4 @@ export function readSearch(typed: string, words: Lexicon = NO_WORDS): Plan {
 		engine: engineOf(left),
 		words: left.map(({ said }) => said)
 	};
-}
-
-function causeNeed(said: string, causes: readonly string[]): Need {
-	const known = causes.map((cause) => `~${cause}`);
-	const [word] = tokensOf(said);
-	const exact = word ? [...known, word.lexeme] : known;
-	return { said, exact, near: exact };
 }

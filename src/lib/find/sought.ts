@@ -1,4 +1,5 @@
-import type { Need, Plan } from './plan';
+import type { Need } from './need';
+import type { Plan } from './plan';
 
 /** A plan as the index is asked: queries over the lexemes of one shop. */
 export interface Sought {
@@ -56,11 +57,16 @@ export function soughtBy(shopId: number, plan: Plan): Sought {
 	const { needs, literally, bin } = plan;
 	const place = bin ? [placeNeed(bin)] : [];
 	const withPlace = [...needs, ...place];
+	const literalFirst = plan.guessed && literally.length > 1;
 	const kindsAlone = plan.kinds.length > 0 && needs.length === 0;
 	const ask = (some: readonly Need[], all: readonly Need[], way: Way) =>
 		either(shopId, plan, some, all, way);
 	return {
-		strict: kindsAlone || needs.length === 0 ? null : ask(needs, literally, 'exact'),
+		strict: literalFirst
+			? allOf(shopId, literally, 'exact')
+			: kindsAlone || needs.length === 0
+				? null
+				: ask(needs, literally, 'exact'),
 		strictWord: withPlace.length === 0 ? null : ask(withPlace, [...literally, ...place], 'exact'),
 		loose:
 			literally.length === 0 ? null : ask(needs.length > 0 ? needs : literally, literally, 'near'),

@@ -3,8 +3,11 @@ import { z } from 'zod';
 import { CHOICE_FIELDS, type ChoiceField } from './choice-fields';
 import type { GivenFigures } from './choices-view';
 
-const share = z.coerce.number().min(0).max(1);
-const cents = z.coerce.number().int().min(0).max(100_000_000);
+const SHARE = 'Enter the chance as a number from 0 to 1';
+const CENTS = 'Enter the amount in whole cents, from 0 to 100000000';
+const MINUTES = 'Enter the minutes as a number from 0 to 10000';
+const share = z.coerce.number(SHARE).min(0, SHARE).max(1, SHARE);
+const cents = z.coerce.number(CENTS).int(CENTS).min(0, CENTS).max(100_000_000, CENTS);
 
 /** The figures of a decision as a script gives them: cents, chances of 0 to 1. */
 export const ChoiceFigures = z
@@ -18,7 +21,7 @@ export const ChoiceFigures = z
 	.partial();
 
 export const PlanQuestion = z.object({
-	minutes: z.coerce.number().min(0).max(10_000).optional()
+	minutes: z.coerce.number(MINUTES).min(0, MINUTES).max(10_000, MINUTES).optional()
 });
 
 const MOST = 1_000_000;

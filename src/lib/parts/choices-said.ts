@@ -27,7 +27,7 @@ const UNTIL: Partial<Record<keyof DecisionInput, string>> = {
 	wholePriceCents: 'until somebody pays for it dead',
 	fixChance: 'until the chance that the repair holds is',
 	stripTotalCents: 'until its parts bring',
-	yardCents: 'until the yard costs'
+	yardCents: 'until two years in the yard cost'
 };
 
 /** A price beyond any engine tips nothing. */

@@ -107,7 +107,9 @@ describe('figures as people give them', () => {
 	});
 
 	it('scripts give cents and shares; minutes are none without a limit', () => {
-		expect(ChoiceFigures.safeParse({ fixChance: '1.2' }).success).toBe(false);
+		expect(ChoiceFigures.safeParse({ fixChance: '1.2' }).error!.issues[0]!.message).toBe(
+			'Enter the chance as a number from 0 to 1'
+		);
 		expect(ChoiceFigures.parse({ newPartsCents: '1200' })).toEqual({ newPartsCents: 1200 });
 		expect(minutesIn(new URLSearchParams('minutes=30'))).toBe(30);
 		for (const none of ['', 'minutes=', 'minutes=x', 'minutes=-5', 'minutes=1e9'])

@@ -1,4 +1,4 @@
-import { FAMILY_FACTOR, type FamilyMark, type Policy } from '$lib/people/policy';
+import { FAMILY_FACTOR, type FamilyMark } from '$lib/people/policy';
 import type { Season } from '$lib/people/settings';
 import { standsBefore, type CauseId, type EngineClass } from '$lib/trade';
 import {
@@ -18,6 +18,7 @@ import {
 	REVIEW_YEARS
 } from './engine-figures';
 import { figuresOf } from './kind-figures';
+import type { ShopFigures } from './learned-view';
 import { roughlyPriced } from './plan';
 import { neverReason } from './verdict';
 import { chanceOf, gainInput, priceAt, pricedGrade, scrapKgCents } from './verdict-inputs';
@@ -34,7 +35,7 @@ export interface DonorToDecide {
 	stripTotalCents: number;
 }
 
-const theta = (policy: Policy) => ({
+const theta = (policy: ShopFigures) => ({
 	moneyRate: yearlyToContinuous(policy.moneyRate, 'money'),
 	dyingRate: yearlyToContinuous(policy.dyingRate, 'dying')
 });
@@ -54,7 +55,7 @@ function repairOf({ cause, secondCause }: DonorToDecide) {
 function onCall(
 	subject: VerdictSubject,
 	there: readonly string[],
-	policy: Policy,
+	policy: ShopFigures,
 	season: Season
 ): number {
 	const chance = chanceOf(subject, policy);
@@ -68,7 +69,7 @@ function onCall(
 }
 
 /** How surely and soon an engine of the family is called for. */
-function engineReach(callsPerYear: number, family: FamilyMark, policy: Policy): number {
+function engineReach(callsPerYear: number, family: FamilyMark, policy: ShopFigures): number {
 	const calls = callsPerYear * FAMILY_FACTOR[family];
 	return reach({ ...theta(policy), callsPerYear: calls, place: 1, waiting: 0 });
 }
@@ -76,7 +77,7 @@ function engineReach(callsPerYear: number, family: FamilyMark, policy: Policy): 
 /** Every figure of the decision: what was given, the rest as usual for its class and its cause. */
 export function decisionFigures(
 	donor: DonorToDecide,
-	policy: Policy,
+	policy: ShopFigures,
 	season: Season,
 	given: GivenFigures = {}
 ): DecisionInput {
@@ -107,7 +108,7 @@ export function decisionFigures(
  */
 export function choicesOf(
 	donor: DonorToDecide,
-	policy: Policy,
+	policy: ShopFigures,
 	season: Season,
 	given: GivenFigures = {}
 ): ChoicesView {

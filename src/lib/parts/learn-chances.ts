@@ -18,9 +18,19 @@ function levelsOf({ kind, cause, secondCause, sureness }: TestsSeen): [Level, nu
 		: [[level, 1]];
 }
 
-/** The chance of each kind at each level, by its bench tests. */
-export function chances({ tests }: Observed, policy: Policy): Taught['chance'] {
-	const seen = new Map<string, { successes: number; failures: number }>();
+interface Count {
+	successes: number;
+	failures: number;
+}
+
+/** How much a row of tests says of a level. */
+function weightAt(row: TestsSeen | undefined, level: Level): number {
+	if (!row) return 0;
+	return levelsOf(row).reduce((sum, [at, weight]) => sum + (at === level ? weight : 0), 0);
+}
+
+function counted(tests: readonly TestsSeen[]): Map<string, Count> {
+	const seen = new Map<string, Count>();
 	for (const row of tests)
 		for (const [level, weight] of levelsOf(row)) {
 			const key = `${row.kind} ${level}`;
@@ -30,23 +40,37 @@ export function chances({ tests }: Observed, policy: Policy): Taught['chance'] {
 				failures: failures + weight * row.failed
 			});
 		}
+	return seen;
+}
+
+/** The chance of each kind at each level, by its bench tests. */
+export function chances({ tests }: Observed, policy: Policy): Taught['chance'] {
+	const seen = counted(tests);
 	const keep = once<Figure>();
-	return (kindId, level) => {
+	return (kindId, level, less) => {
 		const usual = policy.chances[level];
-		const observations = seen.get(`${kindId} ${level}`);
+		const all = seen.get(`${kindId} ${level}`);
 		// what is ruined stays so, whatever a test said: it is not for sale
-		if (!observations || level === 'ruined') return unmoved(usual);
+		if (!all || level === 'ruined') return unmoved(usual);
+		const own = weightAt(less, level);
+		const successes = Math.max(0, all.successes - own * (less?.passed ?? 0));
+		const failures = Math.max(0, all.failures - own * (less?.failed ?? 0));
+		if (successes + failures === 0) return unmoved(usual);
 		const prior = { mean: usual, worth: policy.priors.chance };
-		return keep(`${kindId} ${level}`, () => ({ usual, ...learnChance({ prior, observations }) }));
+		return keep(`${kindId} ${level} ${successes} ${failures}`, () => ({
+			usual,
+			...learnChance({ prior, observations: { successes, failures } })
+		}));
 	};
 }
 
 /** The share that comes back, by what went out. */
 export function comeBacks({ outs }: Observed, policy: Policy): Taught['comeBack'] {
 	const keep = once<Figure>();
+	const byKind = new Map(outs.map((row) => [row.kind, row]));
 	return (kindId) => {
 		const usual = figuresOf(kindId, policy).comeBack;
-		const seen = outs.find((row) => row.kind === kindId);
+		const seen = byKind.get(kindId);
 		if (!seen || seen.out === 0) return unmoved(usual);
 		const failures = Math.max(0, seen.out - seen.back);
 		const observations = { successes: seen.out - failures, failures };

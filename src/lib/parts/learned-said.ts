@@ -1,8 +1,12 @@
-import { percent, plural } from '$lib/format';
+import { plural } from '$lib/format';
 import type { CallsFigure, Figure } from './learned-view';
 
-export const rateSaid = (rate: number): string =>
-	new Intl.NumberFormat('en-US', { maximumSignificantDigits: rate < 1 ? 1 : 2 }).format(rate);
+// made once: a list has thousands of terms
+const [one, two] = [1, 2].map(
+	(maximumSignificantDigits) => new Intl.NumberFormat('en-US', { maximumSignificantDigits })
+) as [Intl.NumberFormat, Intl.NumberFormat];
+
+export const rateSaid = (rate: number): string => (rate < 1 ? one : two).format(rate);
 
 const inTime = (years: number): string => {
 	if (years < 1 / 6) return plural(Math.max(1, Math.round(years * 365)), 'day', 'days');
@@ -10,7 +14,7 @@ const inTime = (years: number): string => {
 };
 
 export const shareBetween = ({ low, high }: Figure): string =>
-	`between ${Math.round(low * 100)} and ${percent(high)}`;
+	`between ${Math.round(low * 100)} and ${Math.round(high * 100)}%`;
 
 export const rateBetween = ({ low, high }: Figure): string =>
 	`between ${rateSaid(low)} and ${rateSaid(high)}`;
@@ -19,19 +23,14 @@ export const rateBetween = ({ low, high }: Figure): string =>
 export const shareSeen = ({ observations }: Figure, done: string): string =>
 	observations === 0 ? '' : `${observations} ${done} here`;
 
-/** How many calls in how long stand behind a rate; '' where nothing was watched. */
-export function callsSeen({ own, others }: CallsFigure): string {
-	const here =
-		own.calls + own.years > 0
-			? `${own.calls} taken for this engine in ${inTime(own.years)} with one ready`
-			: '';
-	const elsewhere = here ? 'for other engines' : 'of its kind taken';
-	const there =
-		others.calls + others.years > 0
-			? `${others.calls} ${elsewhere} in ${inTime(others.years)}, all engines added up`
-			: '';
-	return [here, there].filter(Boolean).join('; ');
-}
+const callsIn = ({ calls, years }: CallsFigure['own'], whose: string) =>
+	`${calls} ${whose} in ${inTime(years)}`;
+
+const isSeen = ({ calls, years }: CallsFigure['own']) => calls + years > 0;
+
+/** How many calls for a kind in how long, the time of all its engines added up. */
+export const callsSeen = ({ others }: CallsFigure): string =>
+	isSeen(others) ? callsIn(others, 'taken') : '';
 
 /** What stands behind a share of a verdict's sum, with its interval; '' for nothing. */
 export function shareTaught(figure: Figure | undefined, done: string): string {
@@ -39,8 +38,13 @@ export function shareTaught(figure: Figure | undefined, done: string): string {
 	return figure && seen ? `${seen}, ${shareBetween(figure)}` : '';
 }
 
-/** The same for calls a year. */
+/** The same for calls a year: on this engine, then on all others. */
 export function callsTaught(figure: CallsFigure | undefined): string {
-	const seen = figure ? callsSeen(figure) : '';
-	return figure && seen ? `${seen}; ${rateBetween(figure)}` : '';
+	if (!figure) return '';
+	const { own, others } = figure;
+	const seen = [
+		...(isSeen(own) ? [callsIn(own, 'taken for this engine')] : []),
+		...(isSeen(others) ? [callsIn(others, 'for other engines together')] : [])
+	];
+	return seen.length === 0 ? '' : `${seen.join(', ')}, ${rateBetween(figure)}`;
 }

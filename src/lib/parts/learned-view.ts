@@ -50,7 +50,8 @@ export interface CallsFigure extends Figure {
 
 /** What a shop's history makes of each figure; one never observed is the usual one to the letter. */
 export interface Taught {
-	chance(kindId: string, level: Level): Figure;
+	/** `less`: the tests of the part itself, which count for it already as its own proofs. */
+	chance(kindId: string, level: Level, less?: TestsSeen): Figure;
 	comeBack(kindId: string): Figure;
 	calls(kindId: string, engineKey: string, family: FamilyMark): CallsFigure;
 	share(grade: Grade): Figure;

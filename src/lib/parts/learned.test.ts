@@ -75,6 +75,18 @@ describe('bench tests', () => {
 		);
 	});
 
+	it('of the part itself count as its own proof and not once more', () => {
+		const proofs = [{ how: 'bench test cold', passed: true }] as const;
+		const alone = verdictOf(subject({ proofs }), DEFAULT_POLICY, 'normal');
+		const own = verdictOf(subject({ proofs }), of({ tests: [tests(1, 0)] }), 'normal');
+		expect(own).toEqual(alone);
+		const others = verdictOf(subject({ proofs }), of({ tests: [tests(9, 5)] }), 'normal');
+		const good = others.terms.find(({ said }) => said === 'Good when fitted')!;
+		expect(good.source).toContain('13 tested here');
+		const odds = (10 * (2.4 + 8)) / (1.6 + 5);
+		expect(good.value).toBeCloseTo(odds / (1 + odds), 12);
+	});
+
 	it('of two causes speak for the worse, of one that was only told half for not known', () => {
 		const two = of({ tests: [tests(4, 0, { cause: 'retired', secondCause: 'flood' })] });
 		expect(chancesFor('starter12', two).low).toBeCloseTo((0.8 + 4) / 8, 12);
@@ -107,6 +119,22 @@ describe('what went out', () => {
 		expect(on('a')).toBeCloseTo((2 * others + 6) / 4, 12);
 		expect(on('never seen')).toBeCloseTo((2 * usual + 9) / (2 + 6), 12);
 		expect(on('')).toBe(on('never seen'));
+	});
+
+	it('says how many calls in how long stand behind it', () => {
+		const figures = of({ calls: [calls('ondraketarn21l', 3, 1.2), calls('b', 1, 4)] });
+		const { terms } = verdictOf(subject({ kind: 'coil' }), figures, 'normal');
+		const source = terms.find(({ said }) => said === 'Calls for it')!.source;
+		expect(source).toContain(
+			"the kind's usual; 3 taken for this engine in 14 months, 1 for other engines together in 4 years, between "
+		);
+		const none = of({ calls: [calls('ondraketarn21l', 0, 3)] });
+		const [said] = verdictOf(subject({ kind: 'coil' }), none, 'normal')
+			.terms.filter((term) => term.said === 'Calls for it')
+			.map((term) => term.source);
+		expect(said).toContain('; 0 taken for this engine in 3 years, between ');
+		const [row] = taughtRows({ ...NOTHING, calls: [calls('b', 9, 2)] }, figures.taught);
+		expect(row!.seen).toBe('4 taken in 5.2 years');
 	});
 
 	it('counts engines of which lots or hardly any are about as that many ordinary ones', () => {

@@ -3,7 +3,7 @@ import type { Level } from '$lib/trade';
 import { figuresOf } from './kind-figures';
 import { calls } from './learn-calls';
 import { chances, comeBacks, shares } from './learn-chances';
-import type { Observed, ShopFigures } from './learned-view';
+import type { Observed, ShopFigures, TestsSeen } from './learned-view';
 import type { VerdictSubject } from './verdict-view';
 import type { Grade } from './words';
 
@@ -25,10 +25,11 @@ export const withHistory = (policy: Policy, observed: Observed): Required<ShopFi
 /** The chances of a kind by what its donor's death left of it. */
 export function chancesFor(
 	kindId: string,
-	{ chances, taught }: Pick<ShopFigures, 'chances' | 'taught'>
+	{ chances, taught }: Pick<ShopFigures, 'chances' | 'taught'>,
+	less?: TestsSeen
 ) {
 	if (!taught) return chances;
-	const of = (level: Level) => taught.chance(kindId, level).mean;
+	const of = (level: Level) => taught.chance(kindId, level, less).mean;
 	return { high: of('high'), medium: of('medium'), low: of('low'), ruined: chances.ruined };
 }
 

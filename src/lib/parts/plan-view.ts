@@ -7,6 +7,8 @@ export interface PlanStep extends PullStep {
 	rough: boolean;
 	/** What it opens the way to, where it is not kept itself. */
 	opens: string[];
+	/** The whole that it stays with, where that is kept. */
+	goesWith: string | null;
 	/** What it is given up for, though it would be worth keeping. */
 	givenUpFor: string[];
 }

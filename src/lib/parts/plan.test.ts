@@ -3,7 +3,7 @@ import { kind, standsBefore } from '$lib/trade';
 import { describe, expect, it } from 'vitest';
 import { subjectsOn } from '../../../tests/support/demo-subjects';
 import { plannable, planOf, planPart } from './plan';
-import { belowSaid, planSaid, stepSaid } from './plan-said';
+import { belowSaid, planSaid, stepSaid, ticksTo } from './plan-said';
 import { verdictOf } from './verdict';
 
 const plan = (donor: number, minutes: number | null = null, policy = DEFAULT_POLICY) =>
@@ -49,7 +49,7 @@ describe('the pull plan of a donor', () => {
 		expect(all('slow')).toBeGreaterThan(all('normal'));
 		expect(all('normal')).toBeGreaterThan(all('rush'));
 		expect(planSaid(usual(5, 30), say)).toBe(
-			'30 of 30 min: keep these 2 parts, then stop. They bring $73 after labour.'
+			'30 of 30 min: keep 2 parts, then stop. $73 after labour.'
 		);
 		expect(planSaid(usual(5, 0), say)).toBe('Nothing pays in these minutes.');
 	});
@@ -109,6 +109,13 @@ describe('what has no price', () => {
 		expect(plannable([{ ...hydro, price: dear }], 'R1')).toHaveLength(1);
 		expect(plannable([{ ...hydro, price: null }], 'R1')).toHaveLength(0);
 	});
+});
+
+it('minutes stand along it at round figures', () => {
+	expect(ticksTo(28)).toEqual([0, 5, 10, 15, 20]);
+	expect(ticksTo(120)).toEqual([0, 30, 60, 90]);
+	expect(ticksTo(4)).toEqual([0]);
+	expect(ticksTo(1000).length).toBeLessThan(8);
 });
 
 it('what can never be stock is neither kept nor listed below the line', () => {

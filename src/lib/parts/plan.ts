@@ -1,8 +1,8 @@
-import type { Policy } from '$lib/people/policy';
 import type { Season } from '$lib/people/settings';
 import { kind, standsBefore, type EngineClass } from '$lib/trade';
 import { pullPlan, type PullPart, type PullStep } from '$lib/worth';
 import { figuresOf } from './kind-figures';
+import type { ShopFigures } from './learned-view';
 import type { PlanBelow, PlanStep, PlanView } from './plan-view';
 import { verdictOf } from './verdict';
 import type { VerdictPrice, VerdictSubject } from './verdict-view';
@@ -49,16 +49,16 @@ export interface PlanPart {
 }
 
 /** What keeping a kind of this donor is worth once it is off; one without a price counts roughly. */
-export function planPart(subject: VerdictSubject, policy: Policy, season: Season): PlanPart {
+export function planPart(subject: VerdictSubject, policy: ShopFigures, season: Season): PlanPart {
 	const off = { ...subject, stillOn: false };
-	const { verdict } = verdictOf(off, policy, season);
+	const { verdict } = verdictOf(off, policy, season, false);
 	const id = subject.kind;
 	if (verdict === 'never') return { id, gainCents: 0, rough: false, never: true };
-	const { gainCents } = verdictOf(roughlyPriced(off), policy, season);
+	const { gainCents } = verdictOf(roughlyPriced(off), policy, season, false);
 	return { id, gainCents: gainCents ?? 0, rough: subject.price === null, never: false };
 }
 
-function toPull({ id, gainCents }: PlanPart, policy: Policy): PullPart {
+function toPull({ id, gainCents }: PlanPart, policy: ShopFigures): PullPart {
 	const { behind, partOf, ruins } = kind(id);
 	const { pullMinutes: minutes } = figuresOf(id, policy);
 	return { id, behind, partOf, ruins, minutes, keepMinutes: policy.keepMinutes, gainCents };
@@ -66,8 +66,11 @@ function toPull({ id, gainCents }: PlanPart, policy: Policy): PullPart {
 
 const nameOf = (id: string) => kind(id).name;
 
-const goTogether = (one: string, other: string) =>
-	kind(one).partOf === other || kind(other).partOf === one;
+/** The whole of a piece, where that whole is kept. */
+function wholeOf(id: string, kept: readonly string[]): string | null {
+	const whole = kept.find((each) => kind(id).partOf === each);
+	return whole === undefined ? null : nameOf(whole);
+}
 
 /** What a part that comes off without being kept is taken off for. */
 function whyOff(part: PlanPart, order: readonly PullStep[], there: readonly string[]) {
@@ -78,9 +81,9 @@ function whyOff(part: PlanPart, order: readonly PullStep[], there: readonly stri
 		.filter(({ id, keep }) => keep && standsBefore(id, there).includes(part.id))
 		.map(({ id }) => nameOf(id));
 	const spoilers = order.map(({ id }) => id).filter((id) => kind(id).ruins?.includes(part.id));
-	const instead = kept.filter((id) => goTogether(id, part.id));
-	const givenUpFor = part.gainCents > 0 ? [...spoilers, ...instead].map(nameOf) : [];
-	return { opens, givenUpFor };
+	const pieces = kept.filter((id) => kind(id).partOf === part.id);
+	const givenUpFor = part.gainCents > 0 ? [...spoilers, ...pieces].map(nameOf) : [];
+	return { opens, givenUpFor, goesWith: part.never ? null : wholeOf(part.id, kept) };
 }
 
 /**
@@ -91,7 +94,7 @@ function whyOff(part: PlanPart, order: readonly PullStep[], there: readonly stri
  */
 export function planOf(
 	subjects: readonly VerdictSubject[],
-	policy: Policy,
+	policy: ShopFigures,
 	season: Season,
 	minutes: number | null = null
 ): PlanView {
@@ -106,14 +109,15 @@ export function planOf(
 	const kept = plan.order.filter(({ keep }) => keep).map(({ id }) => id);
 	const order = plan.order.map((step): PlanStep => {
 		const part = known.get(step.id)!;
-		const why = step.keep ? { opens: [], givenUpFor: [] } : whyOff(part, plan.order, there);
+		const why = step.keep
+			? { opens: [], givenUpFor: [], goesWith: null }
+			: whyOff(part, plan.order, there);
 		return { ...step, ...why, kindName: nameOf(step.id), rough: step.keep && part.rough };
 	});
 	const below = plan.below.flatMap((left): PlanBelow[] => {
 		const part = known.get(left.id)!;
 		if (part.never) return [];
-		const whole = kept.find((id) => kind(left.id).partOf === id);
-		const goesWith = whole === undefined ? null : nameOf(whole);
+		const goesWith = wholeOf(left.id, kept);
 		return [{ ...left, kindName: nameOf(left.id), rough: part.rough, goesWith }];
 	});
 	const unpriced = parts.filter(({ rough }) => rough).length;

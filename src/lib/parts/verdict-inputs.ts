@@ -4,7 +4,7 @@ import { chanceGood, kind, scrapCentsPerGram, type ChanceGood, type Level } from
 import { usedPrice, yearlyToContinuous, type GainInput, type UsedPrice } from '$lib/worth';
 import { figuresOf } from './kind-figures';
 import { callsFor, chancesFor, comeBackFor, shareFor } from './learned';
-import type { ShopFigures } from './learned-view';
+import type { ShopFigures, TestsSeen } from './learned-view';
 import type { VerdictSubject } from './verdict-view';
 import type { Grade } from './words';
 
@@ -16,6 +16,14 @@ const GRADE_IF_PASSED: Record<Level, Grade> = {
 	ruined: 'core'
 };
 
+/** The latest bench test of the part itself. */
+export function ownTest(subject: VerdictSubject): TestsSeen | undefined {
+	const last = subject.proofs.findLast(({ how }) => how.startsWith('bench test'));
+	const { kind, cause, secondCause, sureness } = subject;
+	const passed = Number(last?.passed ?? false);
+	return last && { kind, cause, secondCause, sureness, passed, failed: 1 - passed };
+}
+
 export const chanceOf = (subject: VerdictSubject, policy: ShopFigures): ChanceGood =>
 	chanceGood({
 		kindId: subject.kind,
@@ -23,7 +31,7 @@ export const chanceOf = (subject: VerdictSubject, policy: ShopFigures): ChanceGo
 		secondCause: subject.secondCause,
 		sureness: subject.sureness,
 		proofs: subject.proofs,
-		chances: chancesFor(subject.kind, policy),
+		chances: chancesFor(subject.kind, policy, ownTest(subject)),
 		proofOdds: policy.proofOdds
 	});
 

@@ -7,7 +7,7 @@ import { figuresOf } from './kind-figures';
 import { shareFor } from './learned';
 import { callsTaught, shareTaught } from './learned-said';
 import type { ShopFigures } from './learned-view';
-import { dyingShare, isTested, scrapKgCents, shelfCents } from './verdict-inputs';
+import { dyingShare, isTested, ownTest, scrapKgCents, shelfCents } from './verdict-inputs';
 import type { VerdictSubject, VerdictTerm } from './verdict-view';
 import type { Grade } from './words';
 
@@ -86,7 +86,8 @@ function priceTerms({ subject, policy, grade, used }: Basis): VerdictTerm[] {
 function goodTerms(basis: Basis): VerdictTerm[] {
 	const { subject, policy, chance, worked } = basis;
 	const [cause, ...proved] = chance.terms.map(({ said }) => said);
-	const tests = shareTaught(policy.taught?.chance(subject.kind, chance.level), 'tested');
+	const seen = policy.taught?.chance(subject.kind, chance.level, ownTest(subject));
+	const tests = shareTaught(seen, 'tested');
 	const steps = [taught(`${cause}: ${chance.level}`, tests), ...proved].join('; ');
 	const { input, gain } = worked;
 	const figures = figuresOf(subject.kind, policy);

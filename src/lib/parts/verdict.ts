@@ -103,7 +103,8 @@ function priced(
 	policy: ShopFigures,
 	season: Season,
 	chance: ChanceGood,
-	grade: Grade
+	grade: Grade,
+	withTerms: boolean
 ): Verdict {
 	const used = priceAt(grade, subject.price, policy);
 	const worked = work(subject, policy, season, used.usedCents);
@@ -120,7 +121,7 @@ function priced(
 		untestedCents: waits ? priceAt('untested', subject.price, policy).usedCents : null,
 		rough: null,
 		belowLeast: used.belowLeast,
-		terms: verdictTerms({ subject, policy, season, chance, grade, used, worked }),
+		terms: withTerms ? verdictTerms({ subject, policy, season, chance, grade, used, worked }) : [],
 		figures: { input: worked.input, terms }
 	};
 }
@@ -128,15 +129,21 @@ function priced(
 /**
  * The verdict on one part by the shop's policy: never, needs a price, or what the gain says.
  * In: the part with its place in the queue and the price that counts for it, the whole policy with
- * what the shop's history has taught it, the season. Out: amounts in cents, the terms of the sum with their sources. Throws RangeError on an
+ * what the shop's history has taught it, the season. Out: amounts in cents, the terms of the sum with their
+ * sources unless a list does without. Throws RangeError on an
  * unknown kind or cause.
  */
-export function verdictOf(subject: VerdictSubject, policy: ShopFigures, season: Season): Verdict {
+export function verdictOf(
+	subject: VerdictSubject,
+	policy: ShopFigures,
+	season: Season,
+	withTerms = true
+): Verdict {
 	const chance = chanceOf(subject, policy);
 	const grade = pricedGrade(subject, chance.level);
 	const reason = neverReason(subject, chance);
 	if (!reason && subject.price)
-		return priced({ ...subject, price: subject.price }, policy, season, chance, grade);
+		return priced({ ...subject, price: subject.price }, policy, season, chance, grade, withTerms);
 	const worked = work(subject, policy, season, 0);
 	const base = { ...UNPRICED, ...common(subject, grade, worked, policy), reason };
 	if (reason)
@@ -153,6 +160,8 @@ export function verdictOf(subject: VerdictSubject, policy: ShopFigures, season: 
 		...base,
 		verdict: 'needs a price',
 		rough: roughWord(subject, policy, season, grade),
-		terms: verdictTerms({ subject, policy, season, chance, grade, used: null, worked })
+		terms: withTerms
+			? verdictTerms({ subject, policy, season, chance, grade, used: null, worked })
+			: []
 	};
 }

@@ -3,7 +3,7 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import FlexSearch from 'flexsearch';
-import MiniSearch from 'minisearch';
+import MiniSearch, { type SearchOptions } from 'minisearch';
 import { numberKey } from '../../../src/lib/codes/number';
 import { tokensOf } from '../../../src/lib/donors/lexemes';
 import { findKind } from '../../../src/lib/trade';
@@ -76,7 +76,7 @@ function mini(docs: readonly Doc[], questions: readonly Question[]): Peer {
 	const index = new MiniSearch<Doc>({ fields: ['text'] });
 	index.addAll(docs);
 	const built = seconds(began);
-	const options = {
+	const options: SearchOptions = {
 		prefix: true,
 		fuzzy: (word: string) => (word.length > 4 ? 0.2 : false),
 		combineWith: 'AND'

@@ -113,7 +113,7 @@ function partOf(random: Random, world: Catalogue, shop: WorldShop, id: number): 
 		state,
 		bin: state === 'shelved' ? random.below(shop.bins.length) : null,
 		note: noteOf(random, world),
-		pulled: donor ? donor.takenIn + random.below(60) * DAY : TODAY - random.below(900) * DAY,
+		pulled: Math.min(donor?.takenIn ?? TODAY, TODAY - 60 * DAY) + random.below(59) * DAY,
 		proved: random.chance(0.3)
 			? random.pick(['look-over', 'seen running', 'bench test cold', 'bench test hot'])
 			: null

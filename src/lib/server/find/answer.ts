@@ -1,7 +1,5 @@
 import type { PartState, Grade, ProofWay } from '$lib/parts/words';
-import type { Season } from '$lib/people/settings';
 import type { Sureness } from '$lib/donors/words';
-import type { Policy } from '$lib/people/policy';
 
 /** A part as the database's own search gives it. */
 export interface FoundPart {
@@ -47,6 +45,7 @@ export interface FoundPart {
 
 export interface Hit {
 	at: [string, string];
+	/** How near it comes: 0 a tag, 1 a number, 2 what replaced it, 7 to the letter, 15 known not to fit. */
 	tier: number;
 	fits: boolean | null;
 	same: string;
@@ -71,15 +70,4 @@ export interface Answer extends Counts {
 	total: number;
 	page: Hit[] | null;
 	gone: Hit[] | null;
-	shop: { slug: string; season: Season; timeZone: string; figures: Partial<Policy> | null };
 }
-
-/** How near a hit is: 0 a tag to 15, known not to fit. The numbers of the search function. */
-export const TIER = {
-	tag: 0,
-	number: 1,
-	superseded: 2,
-	numberPiece: 5,
-	serial: 6,
-	nearTag: 10
-} as const;

@@ -25,7 +25,7 @@ export async function countAsked(
 	ctx: Context,
 	plan: Plan,
 	query: FindQuery,
-	{ total, level, shop }: Answer
+	{ total, level, timeZone }: Pick<Answer, 'total' | 'level'> & { timeZone: string }
 ): Promise<void> {
 	const [kind] = plan.kinds;
 	const inVain = total === 0 || level === 3;
@@ -37,7 +37,7 @@ export async function countAsked(
 			shopId: ctx.shopId,
 			memberId: ctx.memberId,
 			kind,
-			on: dayIn(shop.timeZone, ctx.now),
+			on: dayIn(timeZone, ctx.now),
 			engine: plan.engine.join(' '),
 			words: plan.text,
 			at: ctx.now

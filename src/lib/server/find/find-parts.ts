@@ -2,18 +2,17 @@ import { saidFilters } from '$lib/find/filters';
 import type { FindQuery } from '$lib/find/input';
 import { readSearch, type Plan } from '$lib/find/plan';
 import type { Found } from '$lib/find/view';
-import { withDefaults } from '$lib/people/policy';
 import { findKind } from '$lib/trade';
 import { sql } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
-import { recentFigures } from '../parts';
 import type { Answer } from './answer';
 import { countAsked } from './asked';
 import { facetsOf } from './facets';
 import { itemOf } from './item';
 import { nearestKinds } from './nearest';
 import { questionOf } from './question';
+import { shopOf, type ShopOf } from './shop-figures';
 import { wordsOfShop, wordsRead } from './shop-words';
 import { askedKinds, donorsWith, type OpenDonor } from './still-on';
 
@@ -34,7 +33,13 @@ interface Row extends Record<string, unknown> {
 
 const list = (values: readonly string[]) => sql`${sql.param([...values])}::text[]`;
 
-async function look(tx: Tx, ctx: Context, plan: Plan, query: FindQuery): Promise<Row> {
+async function look(
+	tx: Tx,
+	ctx: Context,
+	plan: Plan,
+	query: FindQuery,
+	{ policy }: ShopOf
+): Promise<Row> {
 	const asked = askedKinds(plan, query.kind);
 	const classes = [...new Set(asked.flatMap((one) => one.on))];
 	const ids = asked.map(({ id }) => id);
@@ -43,7 +48,7 @@ async function look(tx: Tx, ctx: Context, plan: Plan, query: FindQuery): Promise
 			? sql`null`
 			: sql`find_on_donors(${list(ids)}, ${list(classes)}, ${list(plan.engine)}, ${plan.donorNumber}::int)`;
 	const { rows } = await tx.execute<Row>(
-		sql`select find_parts(${questionOf(ctx.shopId, plan, query)}::json) as answer, ${donors} as donors`
+		sql`select find_parts(${questionOf(ctx.shopId, plan, query, policy)}::json) as answer, ${donors} as donors`
 	);
 	return rows[0]!;
 }
@@ -72,12 +77,12 @@ const askedWhich = ({ ask }: Plan): Found['ask'] =>
 export const findParts = (ctx: Context, query: FindQuery): Promise<Found> =>
 	inShop(ctx, async (tx, ctx) => {
 		const plan = await planOf(tx, ctx, query.q ?? '');
-		const { answer, donors } = await look(tx, ctx, plan, query);
-		const policy = await recentFigures(ctx, withDefaults(answer.shop.figures ?? {}));
-		const said = { plan, policy, now: ctx.now, ...answer.shop };
+		const shop = await shopOf(tx, ctx);
+		const { answer, donors } = await look(tx, ctx, plan, query, shop);
+		const said = { plan, now: ctx.now, ...shop };
 		const hits = (answer.page ?? []).slice(0, query.limit);
 		const isMore = (answer.page ?? []).length > query.limit;
-		await countAsked(tx, ctx, plan, query, answer);
+		await countAsked(tx, ctx, plan, query, { ...answer, timeZone: shop.timeZone });
 		return {
 			items: hits.map((hit) => itemOf(hit, said)),
 			total: answer.total,

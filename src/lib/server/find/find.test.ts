@@ -1,14 +1,17 @@
 import { FindQuery } from '$lib/find/input';
-import { kind } from '$lib/trade';
-import { inArray } from 'drizzle-orm';
+import { FitNote } from '$lib/parts/fits';
+import { CAUSES, chanceLevel, kind, kinds } from '$lib/trade';
+import { inArray, sql } from 'drizzle-orm';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { addBin } from '../bins';
 import { inShop } from '../context';
 import { testShops, type TestShop } from '../db/test-shop';
 import { parkDonor, takeIn } from '../donors';
-import { holdPart, logOldStock, pullPart, scrapPart, sellPart } from '../parts';
+import { holdPart, logOldStock, noteFit, pullPart, scrapPart, sellPart } from '../parts';
 import { part } from '../parts/tables';
-import { findParts } from './index';
+import { replaceNumber } from '../prices';
+import { exportParts, findParts } from './index';
+import { asked } from './tables';
 
 const ask = (shop: TestShop, query: object) => findParts(shop.ctx, FindQuery.parse(query));
 const tags = async (shop: TestShop, q: string) =>
@@ -200,5 +203,136 @@ describe('pages', () => {
 		expect([...seen].sort()).toEqual([...made].sort());
 		expect(states.indexOf('missing')).toBe(54);
 		expect(seen[0]).toBe(made[13]);
+	});
+});
+
+describe('what is only asked', () => {
+	it('counts looking in vain as a call, one for each person, kind and day', async () => {
+		const { ours } = await testShops();
+		const counter = await ours.as('counter');
+		const look = (ctx: typeof counter, q: string) => findParts(ctx, FindQuery.parse({ q }));
+		for (const q of ['carberator', 'carb', 'carb k3', 'starter under 50']) await look(counter, q);
+		await look(ours.ctx, 'carb');
+		await look({ ...counter, now: new Date('2026-03-15T12:00:00Z') }, 'carb');
+		await logOldStock(ours.ctx, { kind: 'coil', grade: 'usable' });
+		await look(counter, 'coil');
+		const rows = await inShop(ours.ctx, (tx) => tx.select().from(asked));
+		const said = rows.map(({ memberId, kind, on }) => `${memberId} ${kind} ${on}`).sort();
+		expect(said).toEqual(
+			[
+				`${counter.memberId} carb-float 2026-03-14`,
+				`${counter.memberId} carb-float 2026-03-15`,
+				`${counter.memberId} starter12 2026-03-14`,
+				`${ours.ctx.memberId} carb-float 2026-03-14`
+			].sort()
+		);
+	});
+
+	it('follows what was tried on another engine, one way or both, and what does not fit', async () => {
+		const { ours } = await testShops();
+		const old = async (engine: string) =>
+			(await logOldStock(ours.ctx, { kind: 'coil', grade: 'usable', engine })).tag;
+		const tarn = await old('Ondrake TARN-21L');
+		const fern = await old('Sollane FERN-9');
+		const note = (tag: string, more: object) =>
+			noteFit(ours.ctx, tag, FitNote.parse({ engine: 'Pellwyn 8HX', fits: 'yes', ...more }));
+		await note(tarn, { ways: 'both' });
+		await note(fern, { fits: 'no', because: 'leg spacing' });
+		const [first] = (await ask(ours, { q: 'coil 8HX' })).items;
+		expect(first).toMatchObject({
+			tag: tarn,
+			reason: expect.stringContaining('tried there, fits')
+		});
+		expect((await tags(ours, 'coil 8HX')).includes(fern)).toBe(false);
+		const pell = await old('Pellwyn 8HX');
+		expect((await tags(ours, 'coil TARN-21L')).sort()).toEqual([tarn, pell].sort());
+		const both = await ask(ours, { q: 'coil 8hx' });
+		expect(both.items.map(({ tag }) => tag)).toEqual([pell, tarn]);
+	});
+
+	it('knows what a number was replaced by, and not the other way round', async () => {
+		const { ours } = await testShops();
+		const part = async (number: string) =>
+			(await logOldStock(ours.ctx, { kind: 'coil', grade: 'usable', numbers: [number] })).tag;
+		const [old, next] = [await part('TN-100'), await part('TN-300')];
+		const replace = (number: string, by: string, ways: 'one' | 'both' = 'one') =>
+			replaceNumber(ours.ctx, { number, by, ways, note: '' });
+		await replace('TN-100', 'TN-200');
+		await replace('TN-200', 'TN-300');
+		expect(await tags(ours, 'tn100')).toEqual([old, next]);
+		expect(await tags(ours, 'TN 2OO')).toEqual([next]);
+		expect(await tags(ours, 'TN-300')).toEqual([next]);
+		await replace('TN-200', 'TN-300', 'both');
+		await replace('TN-100', 'TN-200', 'both');
+		expect((await tags(ours, 'TN-300')).sort()).toEqual([old, next].sort());
+	});
+
+	it('tells 25 mm from one inch, and 3/4 from 19.05 mm not', async () => {
+		const { ours } = await testShops();
+		const crank = async (note: string) =>
+			(await logOldStock(ours.ctx, { kind: 'crank', grade: 'usable', note })).tag;
+		const [metric, inch, three] = [
+			await crank('25 mm shaft'),
+			await crank('1 in shaft'),
+			await crank('3/4 shaft, keyed')
+		];
+		expect(await tags(ours, 'crank 25mm')).toEqual([metric]);
+		expect(await tags(ours, 'one inch crank')).toEqual([inch]);
+		expect(await tags(ours, '3/4 shaft crank')).toEqual([three]);
+		expect(await tags(ours, 'crank 19.05 mm')).toEqual([three]);
+	});
+
+	it('reads filters off the words and a serial with doubtful characters', async () => {
+		const { ours } = await testShops();
+		const release = { route: 'own' as const, document: '', on: '2026-03-01' };
+		const { number } = await takeIn(ours.ctx, {
+			...{ maker: 'Ondrake', model: 'HX-270V', serial: '12A45-678', class: 'WB' as const },
+			...{ cause: 'worn', sureness: 'seen' as const, release }
+		});
+		await parkDonor(ours.ctx, number, {});
+		const { tag } = await pullPart(ours.ctx, number, { kind: 'coil', grade: 'usable' });
+		expect(await tags(ours, '2A4?67')).toEqual([tag]);
+		expect(await tags(ours, '2A4?97')).toEqual([]);
+		const said = await ask(ours, { q: 'coil under 50 tested' });
+		expect(said.said).toEqual([
+			{ name: 'price', value: '-50' },
+			{ name: 'proof', value: 'tested' }
+		]);
+		expect(said.total).toBe(0);
+		expect(await tags(ours, 'mar 26 worn out coil')).toEqual([tag]);
+		expect((await ask(ours, { q: 'stater' })).ask?.kinds.map(({ kind }) => kind)).toEqual([
+			'starter12',
+			'stator'
+		]);
+	});
+
+	it('saves everything that answers as a CSV, of this shop alone', async () => {
+		const { ours, theirs } = await testShops();
+		for (let at = 0; at < 130; at++)
+			await logOldStock(ours.ctx, { kind: 'coil', grade: 'usable', label: at ? '' : '=1+1' });
+		await logOldStock(theirs.ctx, { kind: 'coil', grade: 'usable', label: 'theirs' });
+		const reader = await ours.as('reader');
+		const text = await new Response(exportParts(reader, FindQuery.parse({ q: 'coil' }))).text();
+		const lines = text.trim().split('\r\n');
+		expect(lines).toHaveLength(131);
+		expect(new Set(lines).size).toBe(131);
+		expect(text).not.toContain('theirs');
+		expect(text).toContain("'=1+1");
+	});
+
+	it('keeps to what the trade ships: what each cause leaves of each kind', async () => {
+		const { ours } = await testShops();
+		const { rows } = await ours.ctx.db.execute<{ kind: string; letters: string; never: boolean }>(
+			sql`select kind, letters, never from kind_level`
+		);
+		const kept = new Map(rows.map((row) => [row.kind, row]));
+		expect(kept.size).toBe(kinds.length);
+		for (const { id, reuse } of kinds) {
+			expect(kept.get(id)?.never, id).toBe(reuse === 'never');
+			const letters = CAUSES.map(
+				(cause) => 'HMLX'['high medium low ruined'.split(' ').indexOf(chanceLevel(id, cause.id))]
+			);
+			expect(kept.get(id)?.letters.padEnd(CAUSES.length, 'X'), id).toBe(letters.join(''));
+		}
 	});
 });

@@ -56,7 +56,7 @@ const outOf = (part: FoundPart): FoundItem['out'] =>
 
 /** A hit as a list shows it, with its verdict and why it stands there. */
 export function itemOf({ part, tier, fits, same, count }: Hit, said: Said): FoundItem {
-	const worth = verdictOf(subjectOf(part, said), said.policy, said.season);
+	const worth = verdictOf(subjectOf(part, said), said.policy, said.season, false);
 	const engine = part.donor === null ? part.engine : `${part.maker} ${part.model}`.trim();
 	return {
 		id: part.id,

@@ -45,6 +45,6 @@ it('finds what is there among 20,000 parts, in every way that it is asked for', 
 });
 
 it('leaves no way of asking behind', () => {
-	const weak = scores.filter(({ recall }) => recall < 0.97);
+	const weak = scores.filter(({ recall }) => recall < 0.95);
 	expect(weak.map(({ class: name, recall }) => `${name} ${recall}`)).toEqual([]);
 });

@@ -5,14 +5,15 @@ import { gradeNo, priceRange, proofRange, saidFilters, standsNo } from '$lib/fin
 import type { FindQuery } from '$lib/find/input';
 import type { Plan } from '$lib/find/plan';
 import { soughtBy } from '$lib/find/sought';
-import { DEFAULT_POLICY } from '$lib/people/policy';
+import { shareFor } from '$lib/parts/learned';
+import type { ShopFigures } from '$lib/parts/learned-view';
 import { GRADES } from '$lib/parts/words';
 import { kinds } from '$lib/trade';
 
-const { shares, copyCap, stepLimitCents, stepLowCents, stepHighCents } = DEFAULT_POLICY;
-const policy = [
-	...GRADES.map((grade) => shares[grade]),
-	...[copyCap, stepLimitCents, stepLowCents, stepHighCents]
+/** What asked prices are worked out by, as the search function takes it. */
+const pricing = (policy: ShopFigures) => [
+	...GRADES.map((grade) => shareFor(grade, policy)),
+	...[policy.copyCap, policy.stepLimitCents, policy.stepLowCents, policy.stepHighCents]
 ];
 const byName = Object.fromEntries(
 	[...kinds].sort((a, b) => a.name.localeCompare(b.name)).map(({ id }, at) => [id, at])
@@ -57,7 +58,12 @@ function donor(plan: Plan, query: FindQuery) {
 }
 
 /** A question as the database's own search takes it. */
-export function questionOf(shopId: number, plan: Plan, query: FindQuery): string {
+export function questionOf(
+	shopId: number,
+	plan: Plan,
+	query: FindQuery,
+	policy: ShopFigures
+): string {
 	const { text, tag, nearTags, numberKey, doubtful, bin, kinds: named, engine } = plan;
 	const { strict, strictWord, loose, looseWord, ...sought } = soughtBy(shopId, plan);
 	const [afterOrd, afterId] = query.cursor?.split('.') ?? [];
@@ -78,7 +84,7 @@ export function questionOf(shopId: number, plan: Plan, query: FindQuery): string
 		kinds: named,
 		engine,
 		...only(plan, query),
-		policy,
+		policy: pricing(policy),
 		most: query.limit,
 		together: query.together === 'yes',
 		sort: query.sort ?? 'fit',

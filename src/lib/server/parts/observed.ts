@@ -21,8 +21,8 @@ const yearOf = (time: ReturnType<typeof sql>) =>
 const stock = ({ shopId, now }: Context, kinds: readonly string[] | null) => sql`
 	select p.id, p.kind, coalesce(nullif(p.engine_key, ''), d.engine_key, '') as engine_key,
 		d.cause, d.second_cause, d.sureness, p.state, ${yearOf(sql`p.pulled_at`)} as since,
-		case when p.state in ('pulled', 'shelved', 'held') then ${yearOf(sql`${now.toISOString()}::timestamptz`)}
-			else ${yearOf(sql`greatest(p.pulled_at, p.changed_at)`)} end as until
+		${yearOf(sql`greatest(p.pulled_at, case when p.state in ('pulled', 'shelved', 'held')
+			then ${now.toISOString()}::timestamptz else p.changed_at end)`)} as until
 	from ${part} p left join ${donor} d on d.shop_id = p.shop_id and d.id = p.donor_id
 	where p.shop_id = ${shopId} and p.scrap_reason is distinct from ${MISTAKE}
 		${kinds === null ? sql`` : sql`and p.kind = any(${sql.param([...kinds])}::text[])`}`;

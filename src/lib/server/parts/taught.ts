@@ -4,7 +4,7 @@ import { inShop, type Context } from '../context';
 import { allow, getPolicy } from '../people';
 import { observed } from './observed';
 
-const MOST = 12;
+const MOST = 8;
 
 /** The figures that this shop's own history has moved most, and how many it has moved at all. */
 export const whatItTaught = (ctx: Context): Promise<{ rows: TaughtRow[]; moved: number }> =>

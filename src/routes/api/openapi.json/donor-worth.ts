@@ -3,6 +3,7 @@ import { z, type Row } from './row';
 import { Decide, Decided, Planned, PlannedBelow, PlannedStep, Tip } from './worth-donor';
 
 const kindName = z.string();
+const goesWith = z.string().nullable().describe('The whole that it stays with');
 const rough = z.boolean().describe('Counted at the middle of its kind: it has no price');
 
 const Plan = Planned.extend({
@@ -12,12 +13,13 @@ const Plan = Planned.extend({
 			id: z.string().describe('Id of the kind'),
 			kindName,
 			rough,
+			goesWith,
 			opens: z.array(z.string()).describe('What it opens the way to, where it is not kept'),
 			givenUpFor: z.array(z.string()).describe('What it is given up for, though worth keeping')
 		})
 	),
 	below: z.array(
-		PlannedBelow.extend({ kindName, rough, goesWith: z.string().nullable() })
+		PlannedBelow.extend({ kindName, rough, goesWith })
 	),
 	unpriced: z.int()
 }).openapi('PullPlan');

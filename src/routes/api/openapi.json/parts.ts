@@ -29,10 +29,25 @@ const verb = (name: string, may: Ability, body: z.ZodType, said: string): Row =>
 const facet = z.array(
 	z.object({ value: z.string(), count: z.int(), said: z.string().optional() })
 );
+const kindNamed = z.object({ kind: z.string(), kindName: z.string() });
+const FoundItem = PartItem.extend({
+	reason: z.string().nullable().describe('Why it answers, where its kind does not say it'),
+	heldUntil: z.string().nullable(),
+	out: z
+		.object({ as: z.enum(['fitted', 'sold']), to: z.string().nullable(), on: z.string() })
+		.nullable(),
+	group: z
+		.object({ same: z.string(), count: z.int() })
+		.nullable()
+		.describe('How many of the same thing answer')
+}).openapi('FoundItem');
 const Found = z.object({
-	items: z.array(PartItem),
+	items: z.array(FoundItem),
 	total: z.int(),
-	facets: z.object({ kind: facet, grade: facet, state: facet, bin: facet }),
+	facets: z.object({
+		...{ kind: facet, grade: facet, state: facet, bin: facet },
+		...{ engine: facet, price: facet, proof: facet }
+	}),
 	donors: z
 		.array(
 			z.object({
@@ -45,7 +60,16 @@ const Found = z.object({
 			})
 		)
 		.describe('Donors that still carry one, with the minutes to pull it'),
-	nearest: z.array(z.object({ kind: z.string(), kindName: z.string(), count: z.int() })),
+	gone: z.array(FoundItem).describe('Parts that went out and would have answered, the last first'),
+	nearest: z.array(kindNamed.extend({ count: z.int() })),
+	ask: z
+		.object({ kinds: z.array(kindNamed) })
+		.nullable()
+		.describe('Kinds that one typed word may mean'),
+	said: z
+		.array(z.object({ name: z.enum(['price', 'proof', 'grade']), value: z.string() }))
+		.describe('Filters that were said in words'),
+	without: z.array(z.string()).describe('Words that no part has: the answer is what was named without them'),
 	next: z.string().nullable()
 });
 
