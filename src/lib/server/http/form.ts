@@ -29,6 +29,16 @@ export function typedText(typed: Typed): Record<string, string | string[]> {
 	return text;
 }
 
+/** What a refused form shows again: what was typed, and that a field was emptied. */
+export function typedAgain(form: FormData): Record<string, string | string[]> {
+	const names = [...form.keys()].filter((name) => name !== 'idempotencyKey');
+	const emptied = names.filter(
+		(name) => !/password|\[\]$/i.test(name) && form.getAll(name).every((value) => value === '')
+	);
+	const { idempotencyKey: _, ...typed } = formObject(form);
+	return { ...Object.fromEntries(emptied.map((name) => [name, ''])), ...typedText(typed) };
+}
+
 const tooLong = (fault: unknown) =>
 	fault instanceof Error && 'status' in fault && fault.status === 413;
 

@@ -4,7 +4,7 @@ import { error, fail, redirect, type ActionFailure, type RequestEvent } from '@s
 import type { z } from 'zod';
 import type { Context } from '../context';
 import { faultOf } from '../http/fault';
-import { formObject, readForm, typedText } from '../http/form';
+import { formObject, readForm, typedAgain, typedText } from '../http/form';
 import { allow } from './allow';
 import { fingerprint, once } from './once';
 
@@ -66,16 +66,15 @@ export async function answerForm<R>(
 	{ request }: Event,
 	work: (form: FormData, fields: ReturnType<typeof formObject>) => Promise<R>
 ): Promise<ActionFailure<Failed> | Kept<R>> {
-	let fields: ReturnType<typeof formObject> = {};
+	let form: FormData | undefined;
 	let done: R;
 	try {
-		const form = await readForm(request);
-		const { idempotencyKey: _, ...typed } = formObject(form);
-		fields = typed;
+		form = await readForm(request);
+		const { idempotencyKey: _, ...fields } = formObject(form);
 		done = await work(form, fields);
 	} catch (thrown) {
 		const { status, problems } = knownFault(thrown);
-		return fail(status, { problems, typed: typedText(fields) });
+		return fail(status, { problems, typed: form ? typedAgain(form) : {} });
 	}
 	if (goesOn(done)) redirect(303, done.to);
 	return done as Kept<R>;

@@ -1,7 +1,7 @@
 import { fail, isHttpError, isRedirect, redirect, type RequestEvent } from '@sveltejs/kit';
 import type { z } from 'zod';
 import { faultOf } from '../http/fault';
-import { formObject, readForm, typedText } from '../http/form';
+import { formObject, readForm, typedAgain } from '../http/form';
 
 /** The action of a page outside any shop (sign-up, invitation): parse, do, redirect; or back with what was typed. */
 export function visitorAction<S extends z.ZodType, E extends RequestEvent>(
@@ -9,15 +9,15 @@ export function visitorAction<S extends z.ZodType, E extends RequestEvent>(
 	verb: (input: z.output<S>, event: E) => Promise<{ to: string }>
 ) {
 	return async (event: E) => {
-		let typed: ReturnType<typeof formObject> = {};
+		let form: FormData | undefined;
 		let to: string;
 		try {
-			typed = formObject(await readForm(event.request));
-			({ to } = await verb(schema.parse(typed), event));
+			form = await readForm(event.request);
+			({ to } = await verb(schema.parse(formObject(form)), event));
 		} catch (thrown) {
 			if (isRedirect(thrown) || isHttpError(thrown)) throw thrown;
 			const { status, problems } = faultOf(thrown);
-			return fail(status, { problems, typed: typedText(typed) });
+			return fail(status, { problems, typed: form ? typedAgain(form) : {} });
 		}
 		redirect(303, to);
 	};
