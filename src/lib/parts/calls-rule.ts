@@ -54,9 +54,54 @@ function without(all: CallsCount = NONE, part: CallsCount = NONE): CallsCount {
 	return { calls: all.calls - part.calls, years: years < ROUNDING ? 0 : years };
 }
 
-function add<Key>(sums: Map<Key, CallsCount>, key: Key, calls: number, years: number): void {
-	const found = sums.get(key) ?? NONE;
-	sums.set(key, { calls: found.calls + calls, years: found.years + years });
+const sum = (a: CallsCount, b: CallsCount): CallsCount => ({
+	calls: a.calls + b.calls,
+	years: a.years + b.years
+});
+
+function add(sums: Map<string, CallsCount>, key: string, calls: number, years: number): void {
+	sums.set(key, sum(sums.get(key) ?? NONE, { calls, years }));
+}
+
+interface Tally {
+	/** In calls as usual: all of them by '', and each kind. */
+	shop: Map<string, CallsCount>;
+	/** In years of an ordinary engine. */
+	kinds: Map<string, CallsCount>;
+	engines: Map<string, CallsRow[]>;
+	rows: Map<string, CallsRow>;
+}
+
+function tallied(seen: readonly CallsRow[], { usual, mark }: CallsBelief): Tally {
+	const [shop, kinds] = [new Map<string, CallsCount>(), new Map<string, CallsCount>()];
+	const [engines, rows] = [new Map<string, CallsRow[]>(), new Map<string, CallsRow>()];
+	for (const row of seen) {
+		const years = row.years * mark(row.engine);
+		for (const key of ['', row.kind]) add(shop, key, row.calls, years * usual(row.kind));
+		add(kinds, row.kind, row.calls, years);
+		if (row.engine === '') continue;
+		rows.set(`${row.kind} ${row.engine}`, row);
+		const on = engines.get(row.engine);
+		if (on) on.push(row);
+		else engines.set(row.engine, [row]);
+	}
+	return { shop, kinds, engines, rows };
+}
+
+/** The shop by all other kinds, then the kind by all engines but that of its own row. */
+function ofKind(
+	{ shop, kinds }: Tally,
+	{ usual, mark, worth }: CallsBelief,
+	kind: string,
+	own?: CallsRow
+): Pick<CallsSteps, 'shop' | 'others'> {
+	const rest = without(shop.get(''), shop.get(kind));
+	const times = learned(1, worth, rest);
+	const here = own && { calls: own.calls, years: own.years * mark(own.engine) };
+	const others = without(kinds.get(kind), here);
+	const believed = usual(kind) * times;
+	const mean = learned(believed, worth, others);
+	return { shop: { ...rest, times }, others: { ...others, believed, mean } };
 }
 
 /**
@@ -68,56 +113,27 @@ function add<Key>(sums: Map<Key, CallsCount>, key: Key, calls: number, years: nu
  * of the way up; without rows the usual figure comes back to the letter. Each step is the mean of a
  * Gamma. Source: Gelman and others 2013, "Bayesian Data Analysis", section 2.6.
  */
-export function callsRule(rows: readonly CallsRow[], { usual, mark, worth }: CallsBelief) {
-	const shop = new Map<string, CallsCount>();
-	const kinds = new Map<string, CallsCount>();
-	const engines = new Map<string, CallsRow[]>();
-	const known = new Map<string, CallsRow>();
-	for (const row of rows) {
-		const marked = row.years * mark(row.engine);
-		for (const key of ['', row.kind]) add(shop, key, row.calls, marked * usual(row.kind));
-		add(kinds, row.kind, row.calls, marked);
-		if (row.engine === '') continue;
-		known.set(`${row.kind} ${row.engine}`, row);
-		const on = engines.get(row.engine);
-		if (on) on.push(row);
-		else engines.set(row.engine, [row]);
-	}
-
-	function ofKind(kind: string, own: CallsRow | undefined) {
-		const rest = without(shop.get(''), shop.get(kind));
-		const times = learned(1, worth, rest);
-		const here = own && { calls: own.calls, years: own.years * mark(own.engine) };
-		const others = without(kinds.get(kind), here);
-		const believed = usual(kind) * times;
-		const mean = learned(believed, worth, others);
-		return { shop: { ...rest, times }, others: { ...others, believed, mean } };
-	}
-	const keepKinds = once<ReturnType<typeof ofKind>>();
-	const kindOn = (kind: string, own: CallsRow | undefined) =>
-		keepKinds(`${kind} ${own?.engine ?? ''}`, () => ofKind(kind, own));
-
-	const keepEngines = once<CallsCount>();
+export function callsRule(seen: readonly CallsRow[], belief: CallsBelief) {
+	const { worth } = belief;
+	const tally = tallied(seen, belief);
+	const [kinds, engines] = [once<ReturnType<typeof ofKind>>(), once<CallsCount>()];
+	const kindFor = (kind: string, own?: CallsRow) =>
+		kinds(`${kind} ${own?.engine ?? ''}`, () => ofKind(tally, belief, kind, own));
+	const inCalls = (row: CallsRow): CallsCount => ({
+		calls: row.calls,
+		years: row.years * kindFor(row.kind, row).others.mean
+	});
 	const onEngine = (engine: string) =>
-		keepEngines(engine, () =>
-			(engines.get(engine) ?? []).reduce(
-				(sum, row) => ({
-					calls: sum.calls + row.calls,
-					years: sum.years + row.years * kindOn(row.kind, row).others.mean
-				}),
-				NONE
-			)
-		);
+		engines(engine, () => (tally.engines.get(engine) ?? []).map(inCalls).reduce(sum, NONE));
 
-	return (kind: string, engine: string, marked: number): CallsSteps => {
-		const row = known.get(`${kind} ${engine}`);
-		const { shop, others } = kindOn(kind, row);
-		const here = row && { calls: row.calls, years: row.years * others.mean };
-		const rest = without(onEngine(engine), here);
-		const times = learned(marked, worth, rest);
+	return (kind: string, engine: string, mark: number): CallsSteps => {
+		const own = tally.rows.get(`${kind} ${engine}`);
+		const { shop, others } = kindFor(kind, own);
+		const rest = without(onEngine(engine), own && inCalls(own));
+		const times = learned(mark, worth, rest);
 		const believed = others.mean * times;
-		const own = row ? { calls: row.calls, years: row.years } : NONE;
-		const mean = learned(believed, worth, own);
-		return { shop, others, engine: { ...rest, times }, own, believed, mean };
+		const seen = own ? { calls: own.calls, years: own.years } : NONE;
+		const mean = learned(believed, worth, seen);
+		return { shop, others, engine: { ...rest, times }, own: seen, believed, mean };
 	};
 }
