@@ -1,4 +1,5 @@
 import { plural } from '$lib/format';
+import { isSeen, type CallsCount } from './calls-rule';
 import type { CallsFigure, Figure } from './learned-view';
 
 // made once: a list has thousands of terms
@@ -23,10 +24,8 @@ export const rateBetween = ({ low, high }: Figure): string =>
 export const shareSeen = ({ observations }: Figure, done: string): string =>
 	observations === 0 ? '' : `${observations} ${done} here`;
 
-const callsIn = ({ calls, years }: CallsFigure['own'], whose: string) =>
+const callsIn = ({ calls, years }: CallsCount, whose: string) =>
 	`${calls} ${whose} in ${inTime(years)}`;
-
-const isSeen = ({ calls, years }: CallsFigure['own']) => calls + years > 0;
 
 /** How many calls for a kind in how long, the time of all its engines added up. */
 export const callsSeen = ({ others }: CallsFigure): string =>
@@ -38,13 +37,18 @@ export function shareTaught(figure: Figure | undefined, done: string): string {
 	return figure && seen ? `${seen}, ${shareBetween(figure)}` : '';
 }
 
-/** The same for calls a year: on this engine, then on all others. */
+const callsAgainst = ({ calls, years }: CallsCount, whose: string) =>
+	`${calls} ${whose} where ${rateSaid(years)} would be usual`;
+
+/** The same for calls a year: on this engine, on all others, and what tells of those by the way. */
 export function callsTaught(figure: CallsFigure | undefined): string {
 	if (!figure) return '';
-	const { own, others } = figure;
+	const { own, others, engine, shop } = figure;
 	const seen = [
 		...(isSeen(own) ? [callsIn(own, 'taken for this engine')] : []),
-		...(isSeen(others) ? [callsIn(others, 'for other engines together')] : [])
+		...(isSeen(others) ? [callsIn(others, 'for other engines together')] : []),
+		...(isSeen(engine) ? [callsAgainst(engine, 'for other parts of this engine')] : []),
+		...(isSeen(shop) ? [callsAgainst(shop, 'for all other kinds')] : [])
 	];
 	return seen.length === 0 ? '' : `${seen.join(', ')}, ${rateBetween(figure)}`;
 }

@@ -2,6 +2,7 @@ import type { FamilyMark, Policy } from '$lib/people/policy';
 import type { CauseId, Level } from '$lib/trade';
 import type { Learned } from '$lib/worth';
 import type { Sureness } from '$lib/donors/words';
+import type { CallsSteps } from './calls-rule';
 import type { Grade } from './words';
 
 /** What the history of a shop says, counted and not yet judged. */
@@ -42,10 +43,12 @@ export interface Figure extends Learned {
 	/** By the policy or the kind, before the history. */
 	usual: number;
 }
-/** Calls: on this engine, and for its kind on all others, counted as ordinary engines. */
+/** Calls: on this engine, for its kind on others, for other kinds on it, and for all other kinds. */
 export interface CallsFigure extends Figure {
-	own: { calls: number; years: number };
-	others: { calls: number; years: number };
+	own: CallsSteps['own'];
+	others: CallsSteps['others'];
+	engine: CallsSteps['engine'];
+	shop: CallsSteps['shop'];
 }
 
 /** What a shop's history makes of each figure; one never observed is the usual one to the letter. */

@@ -115,9 +115,9 @@ describe('what went out', () => {
 		const figures = of({ calls: [calls('a', 6, 2), calls('b', 1, 3), calls('', 2, 1)] });
 		const on = (engineKey: string) =>
 			callsFor({ kind: 'coil', engineKey, family: 'some' }, figures);
-		const others = (2 * usual + 3) / (2 + 4);
-		expect(on('a')).toBeCloseTo((2 * others + 6) / 4, 12);
-		expect(on('never seen')).toBeCloseTo((2 * usual + 9) / (2 + 6), 12);
+		const others = (10 + 3) / (10 / usual + 4);
+		expect(on('a')).toBeCloseTo((10 + 6) / (10 / others + 2), 12);
+		expect(on('never seen')).toBeCloseTo((10 + 9) / (10 / usual + 6), 12);
 		expect(on('')).toBe(on('never seen'));
 	});
 
@@ -133,6 +133,11 @@ describe('what went out', () => {
 			.terms.filter((term) => term.said === 'Calls for it')
 			.map((term) => term.source);
 		expect(said).toContain('; 0 taken for this engine in 3 years, between ');
+		const other = { kind: 'flywheel', engineKey: 'ondraketarn21l', calls: 4, years: 5 };
+		const near = verdictOf(subject({ kind: 'coil' }), of({ calls: [other] }), 'normal');
+		expect(near.terms.find((term) => term.said === 'Calls for it')!.source).toMatch(
+			/; 4 for other parts of this engine where [\d.]+ would be usual, 4 for all other kinds where [\d.]+ would be usual, between /
+		);
 		const [row] = taughtRows({ ...NOTHING, calls: [calls('b', 9, 2)] }, figures.taught);
 		expect(row!.seen).toBe('4 taken in 5.2 years');
 	});
@@ -143,8 +148,8 @@ describe('what went out', () => {
 		const on = (engineKey: string, family: 'lots' | 'some') =>
 			callsFor({ kind: 'coil', engineKey, family }, figures);
 		const usual = callsFor({ kind: 'coil', engineKey: '', family: 'some' }, policy);
-		expect(on('few', 'some')).toBeCloseTo((2 * usual + 6) / (2 + 6), 12);
-		expect(on('many', 'lots')).toBeCloseTo((2 * 3 * usual + 6) / (2 + 2), 12);
+		expect(on('few', 'some')).toBeCloseTo((10 + 6) / (10 / usual + 6), 12);
+		expect(on('many', 'lots')).toBeCloseTo((10 + 6) / (10 / (3 * usual) + 2), 12);
 	});
 });
 
@@ -184,7 +189,7 @@ describe('few never swing it', () => {
 				const at = { kind: 'coil', engineKey: 'a', family: 'some' } as const;
 				const usual = callsFor(at, of({}));
 				const moved = Math.abs(callsFor(at, of({ calls: [calls('a', seen, watched)] })) - usual);
-				const way = Math.abs(seen - usual * watched) / (watched + priors.rateYears);
+				const way = Math.abs(seen - usual * watched) / (watched + priors.calls / usual);
 				expect(moved).toBeLessThanOrEqual(way + 1e-9);
 			})
 		);
@@ -219,7 +224,7 @@ it('the figures moved most come first', () => {
 	const seen: Observed = {
 		tests: [tests(1, 1), tests(0, 30, { kind: 'coil' })],
 		outs: [{ kind: 'coil', out: 40, back: 0 }],
-		calls: [calls('a', 40, 2)],
+		calls: [calls('a', 200, 2)],
 		sales: [sale(6000)]
 	};
 	const rows = taughtRows(seen, of(seen).taught);

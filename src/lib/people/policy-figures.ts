@@ -12,7 +12,7 @@ export type FigureUnit =
 	| 'days'
 	| 'tests'
 	| 'parts out'
-	| 'years'
+	| 'calls'
 	| 'sales';
 
 /** One figure of the policy as the page asks for it. */
@@ -107,7 +107,7 @@ export const FIGURE_GROUPS: readonly FigureGroup[] = [
 		figures: [
 			figure(['priors', 'chance'], 'A chance of being good', 'tests', 'Bench tests of the kind'),
 			figure(['priors', 'comeBacks'], 'A share of come-backs', 'parts out', 'Fitted or sold'),
-			figure(['priors', 'rateYears'], 'Calls a year', 'years', 'With one on the shelf'),
+			figure(['priors', 'calls'], 'Calls a year', 'calls', 'Seen with one on the shelf'),
 			figure(['priors', 'shareSales'], 'A share of new', 'sales', 'Of the grade')
 		]
 	}

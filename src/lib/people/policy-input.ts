@@ -25,7 +25,7 @@ const RANGE: Record<FigureUnit, Range> = {
 	days: { least: 1, most: 3650, whole: true },
 	tests: WEIGHT,
 	'parts out': WEIGHT,
-	years: WEIGHT,
+	calls: WEIGHT,
 	sales: WEIGHT
 };
 

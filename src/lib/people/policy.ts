@@ -71,8 +71,8 @@ export const Policy = z.object({
 		chance: weight,
 		/** Parts gone out that the share of come-backs is worth. */
 		comeBacks: weight,
-		/** Years of watching that calls a year are worth. */
-		rateYears: weight,
+		/** Calls that calls a year are worth, at each step of what is seen. */
+		calls: weight,
 		/** Sales that a share of new is worth. */
 		shareSales: weight
 	}),
@@ -109,7 +109,7 @@ export const DEFAULT_POLICY: Policy = {
 		'bench test cold': 10,
 		'bench test hot': 25
 	},
-	priors: { chance: 4, comeBacks: 20, rateYears: 2, shareSales: 5 },
+	priors: { chance: 4, comeBacks: 20, calls: 10, shareSales: 5 },
 	scrapKgCents: {},
 	families: {},
 	kinds: {}

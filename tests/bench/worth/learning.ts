@@ -4,7 +4,8 @@ import { learnChance, learnShare } from '$lib/worth';
 import { shareOf } from './asking';
 import type { Knowledge } from './knowledge';
 import { LearnedCalls } from './learned-calls';
-import type { Family, Item } from './market';
+import type { Item } from './market';
+import type { World } from './world';
 
 const WORTH = { tests: 4, comeBacks: 20, sales: 5 };
 
@@ -46,8 +47,8 @@ export class Learning implements Knowledge {
 	private readonly calling: LearnedCalls;
 	private readonly chances = new Map<string, number>();
 
-	constructor(families: readonly Family[]) {
-		this.calling = new LearnedCalls(families);
+	constructor({ families, scenario }: Pick<World, 'families' | 'scenario'>) {
+		this.calling = new LearnedCalls(families, scenario.calendar);
 	}
 
 	calls = (item: Item, at: number) => this.calling.perYear(item, at);

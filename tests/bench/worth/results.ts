@@ -33,10 +33,7 @@ const FOURTH_YEAR = 3;
 
 type Way = readonly [name: string, live: (world: World) => Books];
 
-export const LEARNS: Way = [
-	LEARNING,
-	(world) => live(world, new Calculator(new Learning(world.families)))
-];
+export const LEARNS: Way = [LEARNING, (world) => live(world, new Calculator(new Learning(world)))];
 export const IS_TOLD: Way = [TOLD, (world) => live(world, new Calculator(told()))];
 export const KNOWS_ALL: Way = [BOUND, clairvoyant];
 export const ALL_THUMBS: readonly Way[] = THUMBS.map(({ name, make }) => [

@@ -50,6 +50,17 @@ export function seasonAt(week: number, { seasons }: Calendar): Season {
 	return seasons[week % WEEKS] ?? 'normal';
 }
 
+/** Time since the start in years, each week counted by how many of the year's calls it brings. */
+export function watched(years: number, { calls }: Calendar): number {
+	const whole = Math.floor(years);
+	const weeks = (years - whole) * WEEKS;
+	const part = calls.reduce(
+		(sum, weight, week) => sum + weight * Math.min(1, Math.max(0, weeks - week)),
+		0
+	);
+	return whole + part / WEEKS;
+}
+
 /** Labour, cents a minute. */
 export const minuteRate = (season: Season): number => DEFAULT_POLICY.labourHourCents[season] / 60;
 export const NORMAL_RATE = minuteRate('normal');

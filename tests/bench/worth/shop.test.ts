@@ -9,6 +9,7 @@ import type { Item } from './market';
 import type { Rule } from './rule';
 import { SCENARIOS, type Scenario } from './scenario';
 import { live } from './shop';
+import { ALL_YEAR, SNOW, watched } from './season';
 import { KEEP_NOTHING, thumb } from './thumb';
 import { world, type World } from './world';
 
@@ -23,7 +24,7 @@ const one = draw(1);
 const rules: [string, (of: World) => Rule][] = [
 	['keep everything', () => thumb(() => true)],
 	['clean everything', () => thumb(() => true, true)],
-	['learning', (of) => new Calculator(new Learning(of.families))],
+	['learning', (of) => new Calculator(new Learning(of))],
 	['told', () => new Calculator(told())]
 ];
 
@@ -37,7 +38,7 @@ describe('the simulated shop', () => {
 	});
 
 	it('comes out the same from the same seed, and not from another', () => {
-		const money = (of: World) => live(of, new Calculator(new Learning(of.families))).years;
+		const money = (of: World) => live(of, new Calculator(new Learning(of))).years;
 		expect(money(draw(1))).toEqual(money(one));
 		expect(money(draw(2))).not.toEqual(money(one));
 	});
@@ -71,7 +72,7 @@ describe('the simulated shop', () => {
 	it('lets the calculator learn the calls that come, where the defaults say a third of them', () => {
 		const busier = world({ ...one, truth: 'three times the calls', years: 3 });
 		const end = busier.years + busier.sellOff;
-		const learning = new Learning(busier.families);
+		const learning = new Learning(busier);
 		const items = busier.families.flatMap((family) => family.items);
 		const sum = (calls: (item: Item) => number) =>
 			items.reduce((total, item) => total + calls(item), 0);
@@ -84,6 +85,17 @@ describe('the simulated shop', () => {
 });
 
 describe('its tools', () => {
+	it('counts the time watched by the calls that it brings: a year is one, a winter most of it', () => {
+		for (const calendar of [ALL_YEAR, SNOW]) {
+			expect(watched(3, calendar)).toBeCloseTo(3, 9);
+			expect(watched(0, calendar)).toBe(0);
+		}
+		expect(watched(2.5, SNOW) - 2).toBeLessThan(0.4);
+		expect(watched(2.5, SNOW)).toBeLessThan(watched(2.51, SNOW));
+		const month = watched(4 / 52, SNOW);
+		expect(month).toBeCloseTo((4 * SNOW.calls[0]!) / 52, 9);
+	});
+
 	it('assigns for the greatest sum, as trying all ways does', () => {
 		const weights = [
 			[4, 9, 0],

@@ -1,10 +1,11 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import { bin, donorOnBench } from '../../../../tests/support/bench';
 import { testShops, type TestShop } from '../../../../tests/support/shops';
+import { inShop } from '../context';
 import { setSeason } from '../people';
-import { takeIn } from '../donors';
+import { donorRow, editDonor, takeIn } from '../donors';
 import { putPrice } from '../prices';
-import { choicesFor, planFor, pullPart, workOut } from '.';
+import { choicesFor, getPart, kindVerdicts, partVerdicts, planFor, pullPart, workOut } from '.';
 
 let ours: TestShop, theirs: TestShop;
 
@@ -58,6 +59,29 @@ describe('the pull plan', () => {
 		const { number } = await takeIn(ours.ctx, { model: 'WHAT-1' });
 		expect(await planFor(ours.ctx, number)).toMatchObject({ order: [], below: [], totalCents: 0 });
 	});
+});
+
+it('what was paid for a donor changes no verdict of its parts, no plan and no choice', async () => {
+	const on = engine();
+	const donor = await donorOnBench(ours.ctx, { ...on, class: 'R1', fittings: ['12 V start'] });
+	await putPrice(ours.ctx, price(on, 'starter12', 30_000));
+	await putPrice(ours.ctx, price(on, 'coil', 9000));
+	const { tag } = await pullPart(ours.ctx, donor, { kind: 'coil', grade: 'usable', bin: 'K3-1' });
+	const { id } = await getPart(ours.ctx, tag);
+	const row = () => inShop(ours.ctx, (tx, ctx) => donorRow(tx, ctx, donor));
+	const all = async () => ({
+		pulled: (await partVerdicts(ours.ctx, [id])).get(id),
+		still: await kindVerdicts(ours.ctx, (await row()).id, ['starter12', 'recoil']),
+		plan: await planFor(ours.ctx, donor, 30),
+		choices: (await choicesFor(ours.ctx, donor)).choices
+	});
+	const before = await all();
+	expect(before.pulled!.figures).toBeDefined();
+	for (const paidCents of [4000, 250_000]) {
+		await editDonor(ours.ctx, donor, { paidCents });
+		expect((await row()).paidCents).toBe(paidCents);
+		expect(await all()).toEqual(before);
+	}
 });
 
 describe('the five choices', () => {

@@ -1,6 +1,9 @@
 import { beforeEach, describe, expect, it } from 'vitest';
 import { bin, donorOnBench } from '../../../../tests/support/bench';
 import { testShops, type TestShop } from '../../../../tests/support/shops';
+import type { Observed } from '$lib/parts/learned-view';
+import { withHistory } from '$lib/parts/learned';
+import { DEFAULT_POLICY } from '$lib/people/policy';
 import { readQuestion } from '../../find/input';
 import { inShop, type Context } from '../context';
 import { donorRow } from '../donors';
@@ -149,7 +152,7 @@ describe('verdicts', () => {
 		expect(before.chanceGood).toBe(0.6);
 		expect(after.chanceGood).toBeCloseTo((4 * 0.6) / 7, 12);
 		expect(after.usedCents).toBeLessThan(before.usedCents);
-		expect(after.callsPerYear).toBeCloseTo((2 * 0.98 + 1) / 4, 2);
+		expect(after.callsPerYear).toBeCloseTo((10 + 1) / (10 / 0.98 + 2), 2);
 		const { id } = await inShop(ours.ctx, (tx, ctx) => donorRow(tx, ctx, donor));
 		const still = (await kindVerdicts(ours.ctx, id, ['coil'])).get('coil')!;
 		expect(still.figures!.input.chanceGood).toBeCloseTo(2.4 / 7, 12);
@@ -157,6 +160,19 @@ describe('verdicts', () => {
 		expect(good.source).toContain('3 tested here, between ');
 		const { rows } = await whatItTaught(ours.ctx);
 		expect(rows.map(({ figure }) => figure)).toContain('Good, chance medium');
+	});
+
+	it('count calls for what was not asked about too, as to how busy the shop is', async () => {
+		await priced(ours.ctx);
+		const coil = await coils(ours, 1);
+		const { tags } = await coils(ours, 6, 'recoil');
+		for (const tag of tags) await sellPart(ours.ctx, tag, { cents: 2000 });
+		const { callsPerYear } = await onPart(ours.ctx, coil.tags[0]!);
+		const by = (observed: Observed) =>
+			withHistory(DEFAULT_POLICY, observed).taught.calls('coil', ENGINE, 'some').mean;
+		const [all, alone] = [await seen(ours.ctx), await seen(ours.ctx, ['coil'])];
+		expect(callsPerYear).toBeCloseTo(by(all), 2);
+		expect(by(all)).toBeGreaterThan(by(alone) * 1.2);
 	});
 
 	it('never with what another shop has seen', async () => {
@@ -178,7 +194,7 @@ describe('verdicts', () => {
 		await priced(ours.ctx);
 		const { tags } = await coils(ours, 2);
 		await test(ours.ctx, tags[1]!, false);
-		const priors = { chance: 999, comeBacks: 20, rateYears: 2, shareSales: 5 };
+		const priors = { chance: 999, comeBacks: 20, calls: 10, shareSales: 5 };
 		await editPolicy(ours.ctx, { own: { priors }, version: 0 });
 		expect((await onPart(ours.ctx, tags[0]!)).chanceGood).toBeCloseTo((0.6 * 999) / 1000, 12);
 	});

@@ -54,13 +54,19 @@ function figuresOf(found: Kept, policy: Policy): ShopFigures {
 	return made;
 }
 
+async function recent(ctx: Context): Promise<Kept> {
+	const found = shopsOf(ctx.db).get(ctx.shopId) ?? (await read(ctx));
+	const age = Math.abs(ctx.now.getTime() - found.readAt);
+	if (age > FRESH_MS && !found.reading) readBeside(ctx, found);
+	return found;
+}
+
+/** What was counted of all kinds, a few minutes ago. */
+export const recentlyObserved = async (ctx: Context): Promise<Observed> => (await recent(ctx)).seen;
+
 /**
  * A policy with what the shop's history says of everything, as it was a few minutes ago: for long lists that must
  * come at once. A history moves slowly; a page about one part counts anew.
  */
-export async function recentFigures(ctx: Context, policy: Policy): Promise<ShopFigures> {
-	const found = shopsOf(ctx.db).get(ctx.shopId) ?? (await read(ctx));
-	const age = Math.abs(ctx.now.getTime() - found.readAt);
-	if (age > FRESH_MS && !found.reading) readBeside(ctx, found);
-	return figuresOf(found, policy);
-}
+export const recentFigures = async (ctx: Context, policy: Policy): Promise<ShopFigures> =>
+	figuresOf(await recent(ctx), policy);
