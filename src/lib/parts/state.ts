@@ -53,18 +53,9 @@ const can =
 	(part: PartFacts): true | string =>
 		whyNot(move, part)?.said ?? true;
 
-export const canMove = can('move');
-export const canGrade = can('grade');
-export const canEdit = can('edit');
-export const canProve = can('prove');
 export const canHold = can('hold');
-export const canFree = can('free');
-export const canFit = can('fit');
 export const canSell = can('sell');
 export const canTakeBack = can('take back');
-export const canScrap = can('scrap');
-export const canMiss = can('miss');
-export const canFind = can('find');
 export const canShelve = (part: PartFacts): true | string => whyNotShelf(part)?.said ?? true;
 
 /** Logged by mistake and undone at once: such a row stays as history, its kind is on the donor again. */

@@ -2,7 +2,7 @@ import { BinEditForm, BinForm, BinInput } from '$lib/bins/input';
 import { NotFound } from '$lib/refusal';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { inShop } from '../context';
-import { testShops, type TestShop } from '../db/test-shop';
+import { testShops, type TestShop } from '../../../../tests/support/shops';
 import { part } from '../parts/tables';
 import { mintTag } from '../tags';
 import {

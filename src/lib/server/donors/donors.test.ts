@@ -6,7 +6,7 @@ import { and, asc, eq } from 'drizzle-orm';
 import sharp from 'sharp';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { inShop, type Context } from '../context';
-import { testShops, type TestShop } from '../db/test-shop';
+import { testShops, type TestShop } from '../../../../tests/support/shops';
 import { event } from '../people/tables';
 import { keepPhoto } from '../photos';
 import { findTag } from '../tags';

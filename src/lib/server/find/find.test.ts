@@ -5,7 +5,7 @@ import { inArray, sql } from 'drizzle-orm';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { addBin } from '../bins';
 import { inShop } from '../context';
-import { testShops, type TestShop } from '../db/test-shop';
+import { testShops, type TestShop } from '../../../../tests/support/shops';
 import { parkDonor, takeIn } from '../donors';
 import { holdPart, logOldStock, noteFit, pullPart, scrapPart, sellPart } from '../parts';
 import { part } from '../parts/tables';

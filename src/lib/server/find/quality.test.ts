@@ -6,7 +6,7 @@ import { loadWorld } from '../../../../tests/bench/find/load';
 import { makeQuestions } from '../../../../tests/bench/find/questions';
 import { scored, type ClassScore } from '../../../../tests/bench/find/score';
 import { makeWorld, shopSizes } from '../../../../tests/bench/find/world';
-import { testDb } from '../db/test-shop';
+import { testDb } from '../../../../tests/support/shops';
 import { findParts } from './index';
 
 const NOW = new Date('2026-12-01T12:00:00Z');

@@ -7,7 +7,7 @@ import { eq } from 'drizzle-orm';
 import { describe, expect, it } from 'vitest';
 import { addBin } from '../bins';
 import { inShop } from '../context';
-import { testShops, type TestShop } from '../db/test-shop';
+import { testShops, type TestShop } from '../../../../tests/support/shops';
 import { editDonor, parkDonor, takeIn } from '../donors';
 import { donor } from '../donors/tables';
 import {

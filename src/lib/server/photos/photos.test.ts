@@ -7,7 +7,7 @@ import { deflateSync } from 'node:zlib';
 import { and, eq } from 'drizzle-orm';
 import sharp from 'sharp';
 import { beforeAll, describe, expect, it } from 'vitest';
-import { NOON, testShops, type TestShop } from '../db/test-shop';
+import { NOON, testShops, type TestShop } from '../../../../tests/support/shops';
 import { inShop } from '../context';
 import { addDonorPhoto, takeIn } from '../donors';
 import { listKeys } from '../storage';

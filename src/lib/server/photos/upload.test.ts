@@ -4,7 +4,7 @@ import { and, eq, inArray } from 'drizzle-orm';
 import sharp from 'sharp';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { z } from 'zod';
-import { testShops, type TestShop } from '../db/test-shop';
+import { testShops, type TestShop } from '../../../../tests/support/shops';
 import { inShop, type Context } from '../context';
 import { listKeys } from '../storage';
 import { actionWithPhotos, addPhotoRow, changeWithPhoto } from '.';

@@ -1,1 +1,0 @@
-export * from '../../../../tests/support/shops';
