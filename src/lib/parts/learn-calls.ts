@@ -1,9 +1,16 @@
 import { FAMILY_FACTOR, type FamilyMark, type Policy } from '$lib/people/policy';
 import { learnRate } from '$lib/worth';
-import { callsRule, gammaWorth, isSeen, type CallsCount, type CallsSteps } from './calls-rule';
+import {
+	callsRule,
+	gammaWorth,
+	isSeen,
+	type CallsCount,
+	type CallsRow,
+	type CallsSteps
+} from './calls-rule';
 import { figuresOf } from './kind-figures';
 import { once, unmoved } from './learn-once';
-import type { CallsFigure, Observed, Taught } from './learned-view';
+import type { CallsFigure, CallsSeen, Observed, Taught } from './learned-view';
 
 /** By the last step that saw something of the kind itself. */
 function between(steps: CallsSteps, worth: number) {
@@ -17,13 +24,25 @@ function between(steps: CallsSteps, worth: number) {
 	return last(others.believed, others, engine.times);
 }
 
+/** What was taken while one stood ready and what was asked for while none did, one row for each kind and engine. */
+function together(seen: readonly CallsSeen[]): CallsRow[] {
+	const rows = new Map<string, CallsRow>();
+	for (const { kind, engineKey: engine, calls, years } of seen) {
+		const key = `${kind} ${engine}`;
+		const row = rows.get(key) ?? { kind, engine, calls: 0, years: 0 };
+		rows.set(key, { ...row, calls: row.calls + calls, years: row.years + years });
+	}
+	return [...rows.values()];
+}
+
 /** What the history makes of calls; the rule is callsRule, each year of watching like any other. */
-export function calls({ calls: seen }: Observed, policy: Policy): Taught['calls'] {
+export function calls({ calls: seen, asked }: Observed, policy: Policy): Taught['calls'] {
 	const worth = policy.priors.calls;
 	const usuals = once<number>();
 	const usual = (kind: string) => usuals(kind, () => figuresOf(kind, policy).callsPerYear);
 	const mark = (engine: string) => FAMILY_FACTOR[policy.families[engine] ?? 'some'];
-	const rows = seen.map(({ engineKey, ...row }) => ({ ...row, engine: engineKey }));
+	const vain = asked.map((row) => ({ ...row, calls: row.calls * policy.askedWorth }));
+	const rows = together([...seen, ...vain]);
 	const steps = callsRule(rows, { usual, mark, worth });
 	const keep = once<CallsFigure>();
 	const work = (kind: string, engineKey: string, family: FamilyMark): CallsFigure => {

@@ -24,8 +24,11 @@ export const rateBetween = ({ low, high }: Figure): string =>
 export const shareSeen = ({ observations }: Figure, done: string): string =>
 	observations === 0 ? '' : `${observations} ${done} here`;
 
+/** Searches in vain count for part of a call. */
+const tenths = (calls: number) => Math.round(calls * 10) / 10;
+
 const callsIn = ({ calls, years }: CallsCount, whose: string) =>
-	`${calls} ${whose} in ${inTime(years)}`;
+	`${tenths(calls)} ${whose} in ${inTime(years)}`;
 
 /** How many calls for a kind in how long, the time of all its engines added up. */
 export const callsSeen = ({ others }: CallsFigure): string =>
@@ -38,7 +41,7 @@ export function shareTaught(figure: Figure | undefined, done: string): string {
 }
 
 const callsAgainst = ({ calls, years }: CallsCount, whose: string) =>
-	`${calls} ${whose} where ${rateSaid(years)} would be usual`;
+	`${tenths(calls)} ${whose} where ${rateSaid(years)} would be usual`;
 
 /** The same for calls a year: on this engine, on all others, and what tells of those by the way. */
 export function callsTaught(figure: CallsFigure | undefined): string {

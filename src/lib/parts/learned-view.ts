@@ -13,6 +13,8 @@ export interface Observed {
 	outs: readonly { kind: string; out: number; back: number }[];
 	/** Parts taken, and the years in which one stood ready; engine '' is one that is not known. */
 	calls: readonly CallsSeen[];
+	/** Searches that ended in nothing, and the years in which none stood ready. */
+	asked: readonly CallsSeen[];
 	/** What was paid for parts whose new price is known. */
 	sales: readonly SaleSeen[];
 }

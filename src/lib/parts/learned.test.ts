@@ -9,7 +9,7 @@ import { verdictOf } from './verdict';
 import type { VerdictSubject } from './verdict-view';
 import { GRADES } from './words';
 
-const NOTHING: Observed = { tests: [], outs: [], calls: [], sales: [] };
+const NOTHING: Observed = { tests: [], outs: [], calls: [], asked: [], sales: [] };
 const of = (over: Partial<Observed>) => withHistory(DEFAULT_POLICY, { ...NOTHING, ...over });
 const { priors } = DEFAULT_POLICY;
 
@@ -205,6 +205,17 @@ describe('few never swing it', () => {
 		);
 	});
 
+	it('a search in vain counts for part of a call, in the years in which none stood ready', () => {
+		const taken = { kind: 'coil', engineKey: 'a', calls: 2, years: 1 };
+		const [sought, sold] = [
+			{ ...taken, calls: 5, years: 2 },
+			{ ...taken, calls: 3, years: 3 }
+		];
+		const vain = of({ calls: [taken], asked: [sought] }).taught.calls('coil', 'a', 'some');
+		expect(vain.mean).toBeCloseTo(of({ calls: [sold] }).taught.calls('coil', 'a', 'some').mean, 12);
+		expect(of({ asked: [sought] }).taught.calls('coil', 'b', 'some').mean).not.toBe(vain.mean);
+	});
+
 	it('an interval holds its figure, and narrows', () => {
 		fc.assert(
 			fc.property(fc.integer({ min: 1, max: 30 }), fc.integer({ min: 1, max: 30 }), (yes, no) => {
@@ -225,6 +236,7 @@ it('the figures moved most come first', () => {
 		tests: [tests(1, 1), tests(0, 30, { kind: 'coil' })],
 		outs: [{ kind: 'coil', out: 40, back: 0 }],
 		calls: [calls('a', 200, 2)],
+		asked: [],
 		sales: [sale(6000)]
 	};
 	const rows = taughtRows(seen, of(seen).taught);

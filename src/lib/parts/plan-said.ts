@@ -31,10 +31,12 @@ export function stepSaid(step: PlanStep): string | null {
 export function belowSaid(part: PlanBelow, say: Say): string {
 	const more = `${minutesSaid(part.minutes)} more min`;
 	if (part.goesWith) return `Stays with: ${part.goesWith}`;
+	if (part.sacrificedFor.length > 0) return `Sacrificed for ${listed(part.sacrificedFor)}`;
+	const spoils = part.spoils.length > 0 ? `, spoils ${listed(part.spoils)}` : '';
 	const brings = part.totalCents > 0;
 	const some = `would ${brings ? 'bring' : 'cost'} ${say(Math.abs(part.totalCents))}`;
 	const money = Math.abs(part.totalCents) < NOTHING ? 'would bring next to nothing' : some;
-	return `${more}, ${money}${part.rough ? ', roughly' : ''}`;
+	return `${more}, ${money}${part.rough ? ', roughly' : ''}${spoils}`;
 }
 
 /** The plan in one sentence. */

@@ -22,6 +22,10 @@ export interface PlanBelow {
 	rough: boolean;
 	/** The whole that it stays with. */
 	goesWith: string | null;
+	/** What spoils it on its way off. */
+	sacrificedFor: string[];
+	/** What is kept and would be spoiled by it. */
+	spoils: string[];
 }
 
 /** The pull plan of a donor as a page shows it. */

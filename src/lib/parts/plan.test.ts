@@ -83,6 +83,29 @@ describe('the pull plan of a donor', () => {
 	});
 });
 
+describe('what is sacrificed', () => {
+	const priced = (kindId: string, newCents: number) => {
+		const price = { newCents, copyCents: null, source: '', seenOn: '2026-03-03', stale: false };
+		return { ...subjectsOn(7)[0]!, kind: kindId, grade: 'untested' as const, price };
+	};
+	const steps = (augerCents: number, chuteCents: number) =>
+		planOf([priced('auger', augerCents), priced('chute', chuteCents)], DEFAULT_POLICY, 'slow');
+
+	it('is shown as such where the part that spoils it is worth more', () => {
+		const { order, below } = steps(90_000, 60_000);
+		expect(ids(order)).toEqual(['auger']);
+		expect(below).toMatchObject([{ id: 'chute', sacrificedFor: [kind('auger').name] }]);
+		expect(belowSaid(below[0]!, say)).toBe(`Sacrificed for ${kind('auger').name}`);
+	});
+
+	it('is kept where it is worth more, and what would spoil it says so', () => {
+		const { order, below } = steps(20_000, 90_000);
+		expect(ids(order)).toEqual(['chute']);
+		expect(below).toMatchObject([{ id: 'auger', sacrificedFor: [], spoils: [kind('chute').name] }]);
+		expect(belowSaid(below[0]!, say)).toMatch(/would cost .+, spoils Chute/);
+	});
+});
+
 describe('what has no price', () => {
 	it('counts roughly, at the middle of its kind, and is marked', () => {
 		const bare = subjectsOn(4).find((one) => one.price === null && one.kind === 'eclutch')!;

@@ -72,6 +72,15 @@ function wholeOf(id: string, kept: readonly string[]): string | null {
 	return whole === undefined ? null : nameOf(whole);
 }
 
+const spoilersOf = (spoiled: string, order: readonly PullStep[]) =>
+	order.map(({ id }) => id).filter((id) => kind(id).ruins?.includes(spoiled));
+
+/** What a part that stays on is sacrificed for, or would be the end of. */
+const sacrifices = (id: string, order: readonly PullStep[], kept: readonly string[]) => ({
+	sacrificedFor: spoilersOf(id, order).map(nameOf),
+	spoils: kept.filter((each) => kind(id).ruins?.includes(each)).map(nameOf)
+});
+
 /** What a part that comes off without being kept is taken off for. */
 function whyOff(part: PlanPart, order: readonly PullStep[], there: readonly string[]) {
 	const at = order.findIndex(({ id }) => id === part.id);
@@ -80,7 +89,7 @@ function whyOff(part: PlanPart, order: readonly PullStep[], there: readonly stri
 		.slice(at + 1)
 		.filter(({ id, keep }) => keep && standsBefore(id, there).includes(part.id))
 		.map(({ id }) => nameOf(id));
-	const spoilers = order.map(({ id }) => id).filter((id) => kind(id).ruins?.includes(part.id));
+	const spoilers = spoilersOf(part.id, order);
 	const pieces = kept.filter((id) => kind(id).partOf === part.id);
 	const givenUpFor = part.gainCents > 0 ? [...spoilers, ...pieces].map(nameOf) : [];
 	return { opens, givenUpFor, goesWith: part.never ? null : wholeOf(part.id, kept) };
@@ -118,7 +127,8 @@ export function planOf(
 		const part = known.get(left.id)!;
 		if (part.never) return [];
 		const goesWith = wholeOf(left.id, kept);
-		return [{ ...left, kindName: nameOf(left.id), rough: part.rough, goesWith }];
+		const said = { kindName: nameOf(left.id), rough: part.rough, goesWith };
+		return [{ ...left, ...said, ...sacrifices(left.id, plan.order, kept) }];
 	});
 	const unpriced = parts.filter(({ rough }) => rough).length;
 	return { ...plan, minutesAtHand: minutes, order, below, unpriced };

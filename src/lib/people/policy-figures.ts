@@ -83,7 +83,13 @@ export const FIGURE_GROUPS: readonly FigureGroup[] = [
 				'per cent a year',
 				'Rubber, diaphragms'
 			),
-			figure(['waitingChance'], 'A waiting customer takes it', 'per cent')
+			figure(['waitingChance'], 'A waiting customer takes it', 'per cent'),
+			figure(
+				['askedWorth'],
+				'Searches in vain that would have been sales',
+				'per cent',
+				'From memory; no source'
+			)
 		]
 	},
 	{

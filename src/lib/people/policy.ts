@@ -55,6 +55,8 @@ export const Policy = z.object({
 	ownJobShare: share,
 	staleDays: z.number().int().min(1).max(3650),
 	waitingChance: share,
+	/** Calls that a search which ended in nothing is worth. */
+	askedWorth: share,
 	/** Chance that a part is good, by the level its cause of death leaves it at. */
 	chances: z.object({ high: share, medium: share, low: share, ruined: share }),
 	/** What each proof multiplies the odds by. */
@@ -101,6 +103,7 @@ export const DEFAULT_POLICY: Policy = {
 	ownJobShare: 0.9,
 	staleDays: 180,
 	waitingChance: 0.7,
+	askedWorth: 0.2,
 	chances: { high: 0.9, medium: 0.6, low: 0.2, ruined: 0.02 },
 	proofOdds: {
 		'look-over': 1.5,

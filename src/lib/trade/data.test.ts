@@ -16,7 +16,11 @@ describe('the kinds', () => {
 		expect(new Set(kinds.map((each) => each.id)).size).toBe(kinds.length);
 		expect(kinds.length).toBe(122);
 		for (const each of kinds) {
-			for (const other of [...each.behind, ...(each.partOf ? [each.partOf] : [])]) {
+			for (const other of [
+				...each.behind,
+				...(each.ruins ?? []),
+				...(each.partOf ? [each.partOf] : [])
+			]) {
 				expect(isKindId(other), `${each.id} names ${other}`).toBe(true);
 				expect(other).not.toBe(each.id);
 			}

@@ -2485,6 +2485,8 @@ export const KINDS: readonly Kind[] = [
 		newHighCents: 38000,
 		pullMinutes: 40,
 		behind: [],
+		// the flights rust onto its shaft and are cut off: common practice, no source
+		ruins: ['chute'],
 		cleanMinutes: 15,
 		testMinutes: 6,
 		cleanKeeps: true,

@@ -56,7 +56,7 @@ const test = (ctx: Context, tag: string, passed: boolean) =>
 
 describe('what the history of a shop says', () => {
 	it('is nothing in a new one', async () => {
-		expect(await seen(ours.ctx)).toEqual({ tests: [], outs: [], calls: [], sales: [] });
+		expect(await seen(ours.ctx)).toEqual({ tests: [], outs: [], calls: [], asked: [], sales: [] });
 		expect(await whatItTaught(ours.ctx)).toEqual({ rows: [], moved: 0 });
 	});
 
@@ -106,6 +106,22 @@ describe('what the history of a shop says', () => {
 		expect(await year()).toBeCloseTo(2, 2);
 		await sellPart(ours.at(new Date('2025-03-14T12:00:00Z')), tags[1]!, { cents: 2000 });
 		expect(await year()).toBeCloseTo(1, 2);
+	});
+
+	it('counts searches in vain, from the first on, while none stood ready', async () => {
+		const ask = (shop: TestShop, q: string, day: string) =>
+			findParts(shop.at(new Date(`${day}T12:00:00Z`)), readQuestion(new URLSearchParams({ q })));
+		await ask(theirs, 'stator', '2024-01-14');
+		await ask(ours, 'stator', '2024-03-14');
+		await ask(ours, 'stator', '2024-03-14');
+		await ask(ours, 'stator', '2025-03-14');
+		const asked = async () => (await seen(ours.ctx)).asked;
+		expect(await asked()).toMatchObject([{ kind: 'stator', engineKey: '', calls: 2 }]);
+		expect((await asked())[0]!.years).toBeCloseTo(2, 2);
+		const { tags } = await coils(ours, 1, 'stator');
+		expect((await asked())[0]!.years).toBeCloseTo(0, 2);
+		await sellPart(ours.at(new Date('2025-03-14T12:00:00Z')), tags[0]!, { cents: 2000 });
+		expect((await asked())[0]!.years).toBeCloseTo(1, 2);
 	});
 
 	it('forgets what was logged by mistake', async () => {

@@ -7,6 +7,7 @@ import type { Tx } from '../db';
 import { donor } from '../donors/tables';
 import { foundBy } from '../find/tables';
 import { event } from '../people/tables';
+import { inVain } from './in-vain';
 import { part, proof } from './tables';
 
 /** So many sales, the latest, tell what is paid; older ones say less of it every year. */
@@ -56,15 +57,15 @@ const called = sql`
 	union all select kind, engine_key, 1 from stock where state = 'held'`;
 
 /** A call can only be met, and so be seen, while one stands there: years that overlap count once. */
-const stood = sql`
-	select kind, engine_key, greatest(until, before) - greatest(since, before) as years
+const stands = sql`
+	select kind, engine_key, greatest(since, before) as since, greatest(until, before) as until
 	from (select *, max(until) over (partition by kind, engine_key order by since, id
 		rows between unbounded preceding and 1 preceding) as before from stock) s`;
 
 const calls = sql`
 	select kind, engine_key as "engineKey", sum(calls) as calls, sum(years) as years
 	from (select kind, engine_key, calls, 0::float8 as years from (${called}) c
-		union all select kind, engine_key, 0, years from (${stood}) w) x
+		union all select kind, engine_key, 0, until - since from stands) x
 	group by 1, 2`;
 
 const sales = ({ shopId }: Context) => sql`
@@ -89,8 +90,10 @@ export async function observed(
 	kinds: readonly string[] | null
 ): Promise<Observed> {
 	const { rows } = await tx.execute<Row>(sql`
-		with stock as materialized (${stock(ctx, kinds)}), moved as materialized (${moved(ctx)})
+		with stock as materialized (${stock(ctx, kinds)}), moved as materialized (${moved(ctx)}),
+			stands as materialized (${stands})
 		select ${listed(tests(ctx))} as tests, ${listed(calls)} as calls, ${listed(sales(ctx))} as sales,
+			${listed(inVain(ctx, kinds, ctx.now.getTime() / 1000 / YEAR_SECONDS))} as asked,
 			${listed(sql`select kind, sum(out) as out, sum(back) as back from moved group by kind`)} as outs`);
 	const { tests: tested, ...rest } = rows[0]!;
 	return {

@@ -19,7 +19,13 @@ const Plan = Planned.extend({
 		})
 	),
 	below: z.array(
-		PlannedBelow.extend({ kindName, rough, goesWith })
+		PlannedBelow.extend({
+			kindName,
+			rough,
+			goesWith,
+			sacrificedFor: z.array(z.string()).describe('What spoils it on its way off'),
+			spoils: z.array(z.string()).describe('What is kept and would be spoiled by it')
+		})
 	),
 	unpriced: z.int()
 }).openapi('PullPlan');

@@ -1,0 +1,1 @@
+export type TriageAnswers = Record<string, string | readonly string[]>;
