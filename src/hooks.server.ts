@@ -3,7 +3,8 @@ import { NotFound } from '$lib/refusal';
 import { closeDb } from '$lib/server/db';
 import { env } from '$lib/server/env';
 import { FAULT_SAID } from '$lib/server/http/fault';
-import { BARE_POLICY, headers } from '$lib/server/http/headers';
+import { onEveryAnswer } from '$lib/server/http/every-answer';
+import { BARE_POLICY } from '$lib/server/http/headers';
 import { notHere } from '$lib/server/http/not-here';
 import { fromElsewhere } from '$lib/server/http/origin';
 import { tasks } from '$lib/server/jobs';
@@ -23,6 +24,7 @@ import { sequence } from '@sveltejs/kit/hooks';
 export const init: ServerInit = async () => {
 	if (building) return;
 	env();
+	onEveryAnswer();
 	await startQueue(tasks);
 	process.on('sveltekit:shutdown', async () => {
 		await stopQueue();
@@ -85,7 +87,6 @@ const secure: Handle = async ({ event, resolve }) => {
 	});
 	// A redirect's headers cannot be added to: answer with a copy.
 	const response = new Response(answer.body, answer);
-	for (const [name, value] of headers()) response.headers.set(name, value);
 	if (!response.headers.has('Content-Security-Policy'))
 		response.headers.set('Content-Security-Policy', BARE_POLICY);
 	return response;

@@ -62,7 +62,8 @@ test('every kind of answer carries the headers', async () => {
 		'/api/osiergate/parts',
 		'/api/openapi.json',
 		'/osiergate/worth',
-		'/nowhere-at-all/x'
+		'/nowhere-at-all/x',
+		'/drawings.svg'
 	]) {
 		const headers = (await who.get(path)).headers();
 		expect(headers['x-content-type-options'], path).toBe('nosniff');
