@@ -1,21 +1,77 @@
 import type { NavItem } from '$lib/ui/nav';
 import type { Ability } from './role';
 
-/** The ways through a shop; what a role cannot open is not offered. Four on the phone, all on the desk. */
-export function navItems(slug: string, path: string, may: Record<Ability, boolean>): NavItem[] {
-	const at = (area: string) => `/${slug}/${area}`;
-	const item = (area: string, label: string, where?: 'phone' | 'desk'): NavItem => ({
-		href: at(area),
-		label,
-		current: path === at(area) || path.startsWith(`${at(area)}/`),
-		...(where ? { where } : {})
-	});
-	return [
-		item('parts', 'Find'),
-		item('donors', 'Donors'),
-		item('bins', 'Bins'),
-		item('prices', 'Prices', 'desk'),
-		...(may['see costs'] ? [item('worth', 'Worth', 'desk')] : []),
-		item('people', 'More')
-	];
+interface Place {
+	/** Under the shop's address. */
+	area: string;
+	label: string;
+	needs: Ability;
+	/** Always at hand: on the phone's bar too. */
+	first?: true;
+	/** Not on the desk's bar, only on the page of all. */
+	rare?: true;
 }
+
+/** Every place of a shop, by where it is used. */
+const GROUPS: readonly { title: string; places: readonly Place[] }[] = [
+	{
+		title: 'Shelf',
+		places: [
+			{ area: 'parts', label: 'Find', needs: 'see', first: true },
+			{ area: 'donors', label: 'Donors', needs: 'see', first: true },
+			{ area: 'bins', label: 'Bins', needs: 'see', first: true },
+			{ area: 'parts/new', label: 'Log old stock', needs: 'work', rare: true }
+		]
+	},
+	{
+		title: 'Counter',
+		places: [{ area: 'prices', label: 'Prices', needs: 'see' }]
+	},
+	{
+		title: 'Money',
+		places: [
+			{ area: 'worth', label: 'Worth', needs: 'see costs' },
+			{ area: 'worth/calculator', label: 'Calculator', needs: 'see terms', rare: true }
+		]
+	},
+	{
+		title: 'Shop',
+		places: [{ area: 'people/shop', label: 'Shop settings', needs: 'run', rare: true }]
+	}
+];
+
+type Abilities = Record<Ability, boolean>;
+
+/** The deepest place that an address lies in. */
+function placeAt(slug: string, path: string): string | undefined {
+	const areas = [...GROUPS.flatMap(({ places }) => places.map(({ area }) => area)), 'people'];
+	return areas
+		.filter((area) => `${path}/`.startsWith(`/${slug}/${area}/`))
+		.sort((a, b) => b.length - a.length)[0];
+}
+
+/** The bar of places: four on the phone, most on the desk; what a role cannot open is not offered. */
+export function navItems(slug: string, path: string, may: Abilities): NavItem[] {
+	const at = placeAt(slug, path);
+	const places = GROUPS.flatMap((group) => group.places).filter(
+		({ needs, rare }) => may[needs] && !rare
+	);
+	const items = places.map(({ area, label, first }): NavItem => ({
+		href: `/${slug}/${area}`,
+		label,
+		current: at === area || (at?.startsWith(`${area}/`) ?? false),
+		...(first ? {} : { where: 'desk' })
+	}));
+	const known = items.some(({ current, where }) => current && !where);
+	const more = { href: `/${slug}/people`, label: 'More', current: at !== undefined && !known };
+	return [...items, more];
+}
+
+/** The places that are not on the phone's bar, by where they are used. */
+export const morePlaces = (slug: string, may: Abilities) =>
+	GROUPS.map(({ title, places }) => ({
+		title,
+		places: places
+			.filter(({ needs, first }) => may[needs] && !first)
+			.map(({ area, label }) => ({ href: `/${slug}/${area}`, label }))
+	})).filter(({ places }) => places.length > 0);
