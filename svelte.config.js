@@ -7,6 +7,8 @@ export default {
 	kit: {
 		adapter: adapter(),
 		alias: { $fixtures: 'fixtures' },
+		// The shell registers it once somebody is signed in and the page has woken up.
+		serviceWorker: { register: false },
 		// hooks.server.ts checks the origin of every change itself: a script with a key sends none.
 		csrf: { trustedOrigins: ['*'] },
 		csp: {

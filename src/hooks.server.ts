@@ -1,11 +1,13 @@
-import { building } from '$app/environment';
+import { building, dev } from '$app/environment';
 import { NotFound } from '$lib/refusal';
 import { closeDb } from '$lib/server/db';
+import { closeLine } from '$lib/server/db/listen';
 import { env } from '$lib/server/env';
 import { FAULT_SAID } from '$lib/server/http/fault';
 import { onEveryAnswer } from '$lib/server/http/every-answer';
 import { BARE_POLICY } from '$lib/server/http/headers';
 import { notHere } from '$lib/server/http/not-here';
+import { endStreams } from '$lib/server/http/stream';
 import { fromElsewhere } from '$lib/server/http/origin';
 import { tasks } from '$lib/server/jobs';
 import { logFault } from '$lib/server/log';
@@ -26,8 +28,11 @@ export const init: ServerInit = async () => {
 	env();
 	onEveryAnswer();
 	await startQueue(tasks);
+	// open streams would keep the process waiting for its visitors
+	if (!dev) for (const signal of ['SIGTERM', 'SIGINT']) process.once(signal, endStreams);
 	process.on('sveltekit:shutdown', async () => {
 		await stopQueue();
+		await closeLine();
 		await closeDb();
 		process.exit(0);
 	});
@@ -60,12 +65,15 @@ const asData: Handle = async ({ event, resolve }) => {
 	}
 };
 
+/** What a scanned tag opens says itself what a stranger is told. */
+const SCANNED = '/t/[shop=slug]/[tag]';
+
 /** A shop's address opens to its members; to others it is as if it were not there. */
 const guard: Handle = async ({ event, resolve }) => {
 	const { ctx, person } = event.locals;
 	const api = isApi(event);
 	if (api && !event.route.id) return noSuchData();
-	if (!event.params.shop || ctx) return resolve(event);
+	if (!event.params.shop || ctx || event.route.id === SCANNED) return resolve(event);
 	const signedOut = !person;
 	if (api && signedOut)
 		return json(

@@ -4,7 +4,7 @@ import { describe, expect, it } from 'vitest';
 
 const ROUTES = 'src/routes';
 /** Doors outside any shop: each says in a comment above its export who may come. */
-const OUTSIDE = ['(public)', '(auth)', 'theme', 'livez', 'readyz', 'api/openapi.json'];
+const OUTSIDE = ['(public)', '(auth)', 'theme', 'livez', 'readyz', 't/', 'api/openapi.json'];
 const SAYS_WHO = /\/\*\*[^/]*(open to|for whoever)/i;
 const KEEPERS =
 	/^(page|action|read|change|changeWithPhoto|actionWithPhotos|visitorAction)(<\w+>)?\(\s*'(see|see terms|see costs|work|hold|trade|run)'/;

@@ -16,6 +16,8 @@ export default defineConfig({
 		timezoneId: 'America/Chicago',
 		trace: 'retain-on-failure',
 		actionTimeout: 10_000,
+		// It keeps pages of its own, and what passes it cannot be held up by a test; its journey allows it.
+		serviceWorkers: 'block',
 		launchOptions: {
 			...(CHROMIUM_PATH ? { executablePath: CHROMIUM_PATH } : {}),
 			args: ['--no-sandbox']

@@ -1,8 +1,8 @@
 export const PURE = ['worth', 'trade', 'codes', 'units'];
 /** In a line: each may use those to its left. */
 export const AREAS = [
-	...['people', 'tags', 'photos', 'bins', 'prices', 'donors', 'parts'],
-	...['find', 'wants', 'offers', 'ledger']
+	...['people', 'tags', 'scan', 'photos', 'bins', 'prices', 'donors', 'parts'],
+	...['find', 'labels', 'walks', 'yard', 'customers', 'wants', 'offers', 'sales', 'ledger']
 ];
 export const PLUMBING = ['context', 'env', 'log', 'db', 'queue', 'mail', 'storage', 'http'];
 

@@ -13,6 +13,8 @@ export interface Shown {
 	bench: string;
 	bin: string;
 	price: string;
+	want: string;
+	customer: string;
 }
 
 interface Item {
@@ -41,6 +43,11 @@ export async function findShown(page: Page): Promise<Shown> {
 	const shelved = (await parts('shelved')).filter(({ bin }) => bin);
 	await page.goto(`${SHOP}/prices`);
 	const price = await page.locator('.ledger tbody a').first().getAttribute('href');
+	const link = async (list: string, one: string) => {
+		await page.goto(`${SHOP}/${list}`);
+		const found = page.locator(`main a[href^='${SHOP}/${one}']`).first();
+		return (await found.getAttribute('href'))?.split('/').at(-1) ?? '';
+	};
 	const first = async (state: string) => (await parts(state))[0]?.tag ?? '';
 	return {
 		part: shelved.find(({ photo, kind }) => photo && PLAIN.includes(kind))?.tag ?? '',
@@ -53,7 +60,9 @@ export async function findShown(page: Page): Promise<Shown> {
 		whole: await donors('whole'),
 		parked: await donors('parked'),
 		bench: await donors('on the bench'),
-		price: price?.split('/').at(-1) ?? ''
+		price: price?.split('/').at(-1) ?? '',
+		want: await link('wants', 'wants/W'),
+		customer: await link('customers?q=e', 'customers/')
 	};
 }
 
@@ -67,15 +76,22 @@ export const pagesOf = (one: Shown): string[] =>
 		...[`parts/${one.out}/back`, 'donors', 'donors/new'],
 		...[
 			`donors/${one.donor}`,
+			`donors/${one.donor}/label`,
 			`donors/${one.whole}`,
 			`donors/${one.parked}`,
 			`donors/${one.bench}`
 		],
 		...['worth/calculator', 'worth/calculator?kind=starter12&new=136&copy=58&have=2'],
 		...[`donors/${one.bench}?minutes=30`, `donors/${one.bench}/log?minutes=15`],
+		...[`donors/${one.bench}/bench`, `donors/${one.bench}/bench?kind=flywheel`],
+		...[`donors/${one.whole}/triage`, `donors/${one.bench}/triage`],
 		...[`donors/${one.bench}/log`, `donors/${one.bench}/log?kind=flywheel`],
 		...['bins', 'bins/new', `bins/${one.bin}`, 'prices', 'prices/new', `prices/${one.price}`],
-		...['people', 'people/shop', 'worth?kind=flywheel', 'undo', `tags/${one.part}`]
+		...['wants', 'wants?show=closed', 'wants/new', `wants/${one.want}`, `wants/${one.want}/edit`],
+		...['customers', 'customers/new', `customers/${one.customer}`, 'people/letters'],
+		...['people', 'people/shop', 'worth?kind=flywheel', 'undo', 'labels'],
+		...[`labels?tag=${one.part}&stock=a4`, 'labels/settings?stock=a4', 'labels?tag=00000'],
+		...['scan', `scan?part=${one.part}`]
 	].map((path) => `${SHOP}/${path}`);
 
 /** The screens that are used with one gloved thumb, each with its one main action, if it has one. */
@@ -84,6 +100,8 @@ export const phoneScreens = (one: Shown): { path: string; main: string | null }[
 		[
 			['donors/new', 'Take in'],
 			[`donors/${one.bench}/log`, null],
+			[`donors/${one.bench}/bench?kind=muffler`, '(Kept|Off, to scrap)'],
+			[`donors/${one.whole}/triage`, 'Keep the answers'],
 			[`donors/${one.bench}/log?kind=carb-float`, 'Kept'],
 			['parts?q=starter', null],
 			[`parts/${one.part}/hold`, 'Hold it'],

@@ -7,7 +7,10 @@ import { testShops, type TestShop } from '../support/shops';
 import { stock } from '../support/things';
 
 /** A picture in the store or a bare row is no change that anybody sees. */
-const NO_CHANGE = ['keepPhoto', 'savePhoto', 'addPhotoRow', 'listMembers', 'listInvites'];
+const NO_CHANGE = ['keepPhoto', 'savePhoto', 'addPhotoRow'];
+/** One for the run and one for the donor that it closes. */
+const SEVERAL: Record<string, number> = { addScrapRun: 2 };
+const READS = /^(list|get|ready|count|export|draft)|^(lettersAbout|wantState|customerFile)$/;
 
 let ours: TestShop;
 let refs: Refs;
@@ -21,13 +24,13 @@ const events = () => inShop(ours.ctx, (tx) => tx.$count(event, eq(event.shopId, 
 it('every change that is done writes one event, one that is refused none', async () => {
 	const done: string[] = [];
 	for (const [name, door] of Object.entries(DOORS)) {
-		if (door.needs.startsWith('see') || NO_CHANGE.includes(name)) continue;
+		if (door.needs.startsWith('see') || READS.test(name) || NO_CHANGE.includes(name)) continue;
 		const before = await events();
 		const ok = await door.call(ours.ctx, refs).then(
 			() => true,
 			() => false
 		);
-		expect(await events(), name).toBe(before + (ok ? 1 : 0));
+		expect(await events(), name).toBe(before + (ok ? (SEVERAL[name] ?? 1) : 0));
 		if (ok) done.push(name);
 	}
 	expect(done.length).toBeGreaterThan(25);

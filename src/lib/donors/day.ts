@@ -16,3 +16,10 @@ export function sayDay(day: string, today: string): string {
 	if (day.slice(0, 4) !== today.slice(0, 4)) said.year = 'numeric';
 	return new Intl.DateTimeFormat('en-GB', said).format(new Date(`${day}T00:00:00Z`));
 }
+
+/** The day so many days after another. */
+export function dayAfter(day: string, days: number): string {
+	const at = new Date(`${day}T00:00:00Z`);
+	at.setUTCDate(at.getUTCDate() + days);
+	return at.toISOString().slice(0, 10);
+}

@@ -35,6 +35,7 @@ export const DonorEditForm = DonorEdit.omit({
 		typeCode: '',
 		dateCode: '',
 		serial: '',
+		emissionFamily: '',
 		offMachine: '',
 		note: '',
 		displacementCc: null,

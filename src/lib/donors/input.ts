@@ -1,5 +1,6 @@
 import { CAUSES, ENGINE_CLASSES, FITTINGS, SAFE_TICKS } from '$lib/trade';
 import { z } from 'zod';
+import { BlankTag } from '../tags/input';
 import { DONOR_SHOTS, RELEASE_ROUTES, SHAFTS, SURENESS } from './words';
 
 const words = (what: string, most: number) =>
@@ -20,7 +21,12 @@ export const ReleaseInput = z.object({
 	route: z.enum(RELEASE_ROUTES, { error: 'Choose by which route the shop may take it apart' }),
 	document: words('the document', 200).default(''),
 	on: day('the day of the release').optional(),
-	holdUntil: day('the hold date').nullish()
+	holdUntil: day('the hold date').nullish(),
+	fromName: words('the name', 120).optional(),
+	fromAddress: words('the address', 300).optional(),
+	idSeen: words('what was shown', 80).optional(),
+	signedWords: words('what was signed', 2000).optional(),
+	because: words('the reason', 300).optional()
 });
 export type ReleaseInput = z.infer<typeof ReleaseInput>;
 
@@ -34,6 +40,7 @@ const what = {
 	typeCode: words('the type', 60),
 	dateCode: words('the code', 60),
 	serial: words('the serial', 60),
+	emissionFamily: words('the emission family', 24),
 	displacementCc: cc.nullable(),
 	shaft: z.enum(SHAFTS, { error: 'Choose horizontal or vertical' }).nullable(),
 	class: idOf(ENGINE_CLASSES, 'Choose the class of engine').nullable(),
@@ -47,7 +54,7 @@ const what = {
 	note: words('the note', 2000)
 };
 
-export const TakeIn = z.object({ ...what, release: ReleaseInput }).partial();
+export const TakeIn = z.object({ ...what, release: ReleaseInput, tag: BlankTag }).partial();
 export type TakeIn = z.infer<typeof TakeIn>;
 
 export const DonorEdit = z.object({ ...what, version: z.number().int() }).partial();

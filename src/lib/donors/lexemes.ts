@@ -95,6 +95,7 @@ export interface EnginePlate {
 	typeCode: string;
 	dateCode: string;
 	serial: string;
+	emissionFamily?: string;
 	displacementCc: number | null;
 	offMachine: string;
 	shaft: string | null;
@@ -103,7 +104,10 @@ export interface EnginePlate {
 /** What a donor lends its parts to be found by. */
 export function engineLexemes(plate: EnginePlate): string {
 	const { maker, model, typeCode, dateCode, serial, displacementCc, offMachine, shaft } = plate;
-	const whole = [model, typeCode, dateCode, serial].map(numberKey).filter((key) => /\d/.test(key));
+	const family = plate.emissionFamily ?? '';
+	const whole = [model, typeCode, dateCode, serial, family]
+		.map(numberKey)
+		.filter((key) => /\d/.test(key));
 	const cc = displacementCc ? [`${Math.round(displacementCc)}cc`] : [];
 	const rest = lexemesOf(maker, model, typeCode, dateCode, serial, offMachine, shaft ?? '');
 	return [...new Set([...whole, ...cc, ...rest.split(' ')])].filter(Boolean).join(' ');

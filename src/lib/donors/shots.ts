@@ -18,5 +18,10 @@ export const SHOT_SAID: Record<DonorShot, string> = {
 	'carburetor side': 'carburetor side',
 	failure: 'inside, or the failure',
 	box: 'the box',
+	part: 'a part',
 	other: 'something else'
 };
+
+/** Which of the wanted views nobody has taken yet, in their order. */
+export const missingShots = (taken: readonly DonorShot[]): DonorShot[] =>
+	WANTED_SHOTS.filter((shot) => !taken.includes(shot));

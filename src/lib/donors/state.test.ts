@@ -2,7 +2,15 @@ import { SAFE_TICKS } from '$lib/trade';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { dayIn, sayDay } from './day';
-import { afterMove, canPull, gatesShut, noMoveSaid, replay, type DonorMove } from './state';
+import {
+	afterMove,
+	canPull,
+	gatesShut,
+	noMoveSaid,
+	releaseGate,
+	replay,
+	type DonorMove
+} from './state';
 import { WANTED_SHOTS } from './shots';
 import { todoOf } from './todo';
 import { DONOR_STATES, type DonorState } from './words';
@@ -51,6 +59,17 @@ describe('the gates before stripping', () => {
 	});
 });
 
+describe('leaving', () => {
+	it('needs the release and its hold date only, and the owner may have passed them', () => {
+		const gates = (release: { holdUntil: string | null } | null, gateOverruled = false) =>
+			releaseGate({ gateOverruled }, release, TODAY).map(({ gate }) => gate);
+		expect(gates(null)).toEqual(['release']);
+		expect(gates({ holdUntil: '2026-03-11' })).toEqual(['hold']);
+		expect(gates({ holdUntil: TODAY })).toEqual([]);
+		expect(gates(null, true)).toEqual([]);
+	});
+});
+
 describe('pulling', () => {
 	it('is open on the bench and on a parked donor whose release is in order', () => {
 		expect(canPull({ ...ready, state: 'on the bench' }, null, TODAY)).toBe(true);
@@ -61,7 +80,7 @@ describe('pulling', () => {
 });
 
 describe('a donor on its way', () => {
-	const moves: DonorMove[] = ['strip', 'park', 'finish', 'reopen'];
+	const moves: DonorMove[] = ['strip', 'park', 'finish', 'reopen', 'scrap', 'sell'];
 
 	it('never leaves its states, and its events replay to where it is', () => {
 		fc.assert(

@@ -2,20 +2,24 @@ import { isSafeToStore, SAFE_TICKS } from '$lib/trade';
 import { sayDay } from './day';
 import type { DonorState } from './words';
 
-export type DonorMove = 'strip' | 'park' | 'finish' | 'reopen';
+export type DonorMove = 'strip' | 'park' | 'finish' | 'reopen' | 'scrap' | 'sell';
 
 /** What may follow what: the one table of a donor's life. */
 const MOVES: Record<DonorMove, Partial<Record<DonorState, DonorState>>> = {
 	strip: { whole: 'on the bench', parked: 'on the bench' },
 	park: { whole: 'parked' },
 	finish: { 'on the bench': 'stripped', parked: 'stripped' },
-	reopen: { stripped: 'on the bench', parked: 'whole' }
+	reopen: { stripped: 'on the bench', parked: 'whole' },
+	scrap: { whole: 'gone', parked: 'gone', stripped: 'gone' },
+	sell: { whole: 'gone', parked: 'gone', 'on the bench': 'gone', stripped: 'gone' }
 };
 
 export interface GateDonor {
 	state: DonorState;
 	cause: string | null;
 	safeTicks: readonly string[];
+	/** The owner passed the release that stands, with a reason. */
+	gateOverruled?: boolean;
 }
 
 export interface GateRelease {
@@ -39,7 +43,13 @@ export function noMoveSaid(state: DonorState, move: DonorMove): string {
 	return `It is ${state}. Only a donor that is ${from} can do this.`;
 }
 
-function releaseGate(release: GateRelease | null, today: string): Gate[] {
+/** The release and its hold date, before the engine or anything off it may be stripped, sold or scrapped. */
+export function releaseGate(
+	{ gateOverruled }: Pick<GateDonor, 'gateOverruled'>,
+	release: GateRelease | null,
+	today: string
+): Gate[] {
+	if (gateOverruled) return [];
 	if (!release)
 		return [
 			{
@@ -59,7 +69,7 @@ function releaseGate(release: GateRelease | null, today: string): Gate[] {
  * In: the donor, the newest release or null, the day it is in the shop. Out: empty when it may be stripped.
  */
 export function gatesShut(donor: GateDonor, release: GateRelease | null, today: string): Gate[] {
-	const gates = releaseGate(release, today);
+	const gates = releaseGate(donor, release, today);
 	if (donor.cause === null || donor.cause === 'unknown')
 		gates.push({ gate: 'cause', said: 'Name the cause of death first.', overrulable: false });
 	if (!isSafeToStore(donor.safeTicks)) {
@@ -82,7 +92,7 @@ export function canPull(
 	if (donor.state === 'on the bench') return true;
 	if (donor.state !== 'parked')
 		return `The donor is ${donor.state}. Put it on the bench before pulling parts.`;
-	return releaseGate(release, today)[0]?.said ?? true;
+	return releaseGate(donor, release, today)[0]?.said ?? true;
 }
 
 /** The state that a donor's events lead to; equal to its row at all times. */

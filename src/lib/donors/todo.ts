@@ -1,9 +1,9 @@
 import { gatesShut, type GateDonor, type GateRelease } from './state';
-import { WANTED_SHOTS, SHOT_SAID } from './shots';
+import { missingShots, SHOT_SAID } from './shots';
 import type { DonorShot } from './words';
 
 export interface Todo {
-	id: 'cause' | 'release' | 'hold' | 'safe' | 'photos';
+	id: 'cause' | 'release' | 'hold' | 'safe' | 'photos' | 'review';
 	said: string;
 }
 
@@ -16,7 +16,7 @@ const SHORT = {
 
 /** What is still to be done for a donor before and beside stripping; empty once it is gone or stripped. */
 export function todoOf(
-	donor: GateDonor,
+	donor: GateDonor & { reviewOn?: string | null },
 	release: GateRelease | null,
 	shots: readonly DonorShot[],
 	today: string
@@ -26,7 +26,9 @@ export function todoOf(
 		id: gate,
 		said: SHORT[gate] || said
 	}));
-	const missing = WANTED_SHOTS.filter((shot) => !shots.includes(shot));
+	if (donor.state === 'parked' && donor.reviewOn && donor.reviewOn <= today)
+		todo.push({ id: 'review', said: 'Parked long: strip it, sell it or scrap it' });
+	const missing = missingShots(shots);
 	if (missing.length > 0) {
 		const said = `Photos: ${missing.map((shot) => SHOT_SAID[shot]).join(', ')}`;
 		todo.push({ id: 'photos', said });

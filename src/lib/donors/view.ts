@@ -18,6 +18,8 @@ export interface DonorItem {
 	takenInAt: string;
 	partCount: number;
 	photo: PhotoLinks | null;
+	/** That photo as a tiny picture, in base64; '' without one. */
+	blur: string;
 	todo: Todo[];
 }
 
@@ -25,6 +27,8 @@ export interface DonorPhotoView {
 	id: number;
 	shot: DonorShot;
 	alt: string;
+	/** A dozen points of it as a tiny picture, in base64. */
+	blur: string;
 	links: PhotoLinks;
 }
 
@@ -60,6 +64,8 @@ export interface DonorView extends DonorItem {
 	typeCode: string;
 	dateCode: string;
 	serial: string;
+	/** As it stands on the emission label. */
+	emissionFamily: string;
 	displacementCc: number | null;
 	shaft: Shaft | null;
 	fittings: string[];

@@ -41,6 +41,7 @@ export const DONOR_SHOTS = [
 	'carburetor side',
 	'failure',
 	'box',
+	'part',
 	'other'
 ] as const;
 export type DonorShot = (typeof DONOR_SHOTS)[number];

@@ -6,7 +6,15 @@ const item: FoundItem = {
 	...{ id: 1, tag: '0A1B2', kind: 'coil', kindName: 'Ignition coil', label: '=HYPERLINK("x")' },
 	...{ grade: 'usable', state: 'held', bin: 'K3-1', donor: 'D4', engine: 'Ondrake "TARN", 21' },
 	...{ askedCents: 1400, copyCents: null, newCents: 4405, verdict: 'keep', gainCents: 900 },
-	...{ photo: null, heldBy: 'Wenna', heldUntil: null, out: null, reason: null, group: null }
+	...{
+		photo: null,
+		setMissing: '',
+		heldBy: 'Wenna',
+		heldUntil: null,
+		out: null,
+		reason: null,
+		group: null
+	}
 };
 
 it('keeps commas and quotes inside a cell and runs nothing', () => {

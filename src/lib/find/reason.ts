@@ -11,7 +11,6 @@ export interface Reasonable {
 	label: string;
 	note: string;
 	serial: string | null;
-	typeCode: string | null;
 	cc: number | null;
 }
 

@@ -1,29 +1,64 @@
 import { z } from 'zod';
+import { setOf } from '../trade';
 import { ownPath } from '../people/own-path';
 import { typedAmount } from '../people/typed-money';
+import { DESTROYED, NOT_KEPT, readIn } from './bench/answer';
 import { ASK_GRADE, Edit, gradeOrScrap, logged, Proof } from './input';
-import { words, yesNo } from './typed';
+import { ticks, words, yesNo } from './typed';
+
+/** Figures come in fields named after what the test reads, `read-coil`. */
+const withFigures = (fields: unknown) => {
+	const figures = readIn(fields as Record<string, unknown>);
+	return figures ? { ...(fields as object), figures } : fields;
+};
+
+/** A proof as its form sends it. */
+export const ProofForm = z.preprocess(withFigures, Proof);
+
+interface TypedSet {
+	kind: string;
+	set?: string | undefined;
+	setMissing?: string | undefined;
+}
+
+/** What was ticked as missing, beside what was typed. */
+function setWithout(typed: TypedSet, missing: readonly string[]) {
+	const there = setOf(typed.kind).filter((piece) => !missing.includes(piece));
+	return {
+		set: typed.set || there.join(', '),
+		setMissing: [...missing, typed.setMissing].filter(Boolean).join(', ')
+	};
+}
+
+const FlatLog = z.object({
+	...logged,
+	proof: z.undefined().optional(),
+	scrapped: z.undefined().optional(),
+	engine: words(120).optional(),
+	/** The button of a bin that was suggested. */
+	put: words(40).optional(),
+	how: Proof.shape.how.optional(),
+	figure: Proof.shape.figure,
+	figures: Proof.shape.figures,
+	unit: Proof.shape.unit,
+	passed: yesNo.optional(),
+	scrap: z.enum(['scrap', 'destroy']).optional(),
+	reason: words(120).optional(),
+	/** Ticked as missing from the set that belongs to the kind. */
+	missing: ticks.optional()
+});
 
 /** Logging as a flat form sends it: the proof's fields beside the others, `scrap` a button. */
 export const LogForm = z
-	.object({
-		...logged,
-		proof: z.undefined().optional(),
-		scrapped: z.undefined().optional(),
-		engine: words(120).optional(),
-		how: Proof.shape.how.optional(),
-		figure: Proof.shape.figure,
-		unit: Proof.shape.unit,
-		passed: yesNo.optional(),
-		scrap: z.enum(['scrap', 'destroy']).optional(),
-		reason: words(120).optional()
-	})
-	.transform(({ how, figure, unit, passed, scrap, reason, ...rest }) => ({
+	.preprocess(withFigures, FlatLog)
+	.transform(({ how, figure, figures, unit, passed, scrap, reason, put, missing, ...rest }) => ({
 		...rest,
-		proof: how ? { how, figure, unit, passed: passed ?? true } : undefined,
+		...(missing ? setWithout(rest, missing) : {}),
+		bin: put ?? rest.bin,
+		proof: how ? { how, figure, figures, unit, passed: passed ?? true } : undefined,
 		scrapped: scrap
 			? {
-					reason: reason ?? (scrap === 'destroy' ? 'destroyed, not safe' : 'not worth keeping'),
+					reason: reason ?? (scrap === 'destroy' ? DESTROYED : NOT_KEPT),
 					destroyed: scrap === 'destroy'
 				}
 			: undefined
@@ -55,8 +90,12 @@ export const SellForm = z.object({
 });
 export type SellForm = z.infer<typeof SellForm>;
 
+/** What is taken back: one event, or several done in one go, with commas between. */
 export const Undo = z.object({
-	event: z.coerce.number().int().positive(),
+	event: z
+		.string()
+		.transform((typed) => typed.split(','))
+		.pipe(z.array(z.coerce.number<string>().int().positive()).max(60)),
 	back: z.string().default('/').transform(ownPath)
 });
 export type Undo = z.infer<typeof Undo>;

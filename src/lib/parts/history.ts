@@ -20,6 +20,7 @@ const SAID: Record<string, (detail: Record<string, unknown>, toState: string | n
 	photo: () => 'Photo added',
 	prove: (d) =>
 		`${word(d.how)}: ${d.passed === true ? 'passed' : 'failed'}${after(', ', d.figure)}`,
+	clean: (d) => `Cleaned: ${d.cameRight === true ? 'came right' : 'not right yet'}`,
 	hold: (d) => `Held for ${word(d.for)}`,
 	free: (d) => (d.expired === true ? 'The hold ran out' : 'Freed'),
 	fit: (d) => `Fitted on ${word(d.job)}`,

@@ -41,7 +41,10 @@ export function calls({ calls: seen, asked }: Observed, policy: Policy): Taught[
 	const usuals = once<number>();
 	const usual = (kind: string) => usuals(kind, () => figuresOf(kind, policy).callsPerYear);
 	const mark = (engine: string) => FAMILY_FACTOR[policy.families[engine] ?? 'some'];
-	const vain = asked.map((row) => ({ ...row, calls: row.calls * policy.askedWorth }));
+	const vain = asked.map(({ sought, wanted, ...row }) => ({
+		...row,
+		calls: sought * policy.askedWorth + wanted
+	}));
 	const rows = together([...seen, ...vain]);
 	const steps = callsRule(rows, { usual, mark, worth });
 	const keep = once<CallsFigure>();

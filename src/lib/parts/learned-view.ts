@@ -13,8 +13,8 @@ export interface Observed {
 	outs: readonly { kind: string; out: number; back: number }[];
 	/** Parts taken, and the years in which one stood ready; engine '' is one that is not known. */
 	calls: readonly CallsSeen[];
-	/** Searches that ended in nothing, and the years in which none stood ready. */
-	asked: readonly CallsSeen[];
+	/** What was asked for in vain, and the years in which none stood ready. */
+	asked: readonly AskedSeen[];
 	/** What was paid for parts whose new price is known. */
 	sales: readonly SaleSeen[];
 }
@@ -31,6 +31,14 @@ export interface CallsSeen {
 	kind: string;
 	engineKey: string;
 	calls: number;
+	years: number;
+}
+/** Searches that ended in nothing, and wants that nothing was sold to. */
+export interface AskedSeen {
+	kind: string;
+	engineKey: string;
+	sought: number;
+	wanted: number;
 	years: number;
 }
 export interface SaleSeen {

@@ -207,10 +207,8 @@ describe('few never swing it', () => {
 
 	it('a search in vain counts for part of a call, in the years in which none stood ready', () => {
 		const taken = { kind: 'coil', engineKey: 'a', calls: 2, years: 1 };
-		const [sought, sold] = [
-			{ ...taken, calls: 5, years: 2 },
-			{ ...taken, calls: 3, years: 3 }
-		];
+		const sought = { kind: 'coil', engineKey: 'a', sought: 5, wanted: 1, years: 2 };
+		const sold = { ...taken, calls: 4, years: 3 };
 		const vain = of({ calls: [taken], asked: [sought] }).taught.calls('coil', 'a', 'some');
 		expect(vain.mean).toBeCloseTo(of({ calls: [sold] }).taught.calls('coil', 'a', 'some').mean, 12);
 		expect(of({ asked: [sought] }).taught.calls('coil', 'b', 'some').mean).not.toBe(vain.mean);

@@ -9,6 +9,7 @@ export interface KindTile {
 	minutes?: number;
 	verdict?: KindStillOn['verdict'];
 	never?: string | null;
+	waitingFor?: string | null;
 }
 
 /** The kinds that go by what was typed; what is still on the donor keeps its minutes and verdict. */

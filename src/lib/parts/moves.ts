@@ -29,6 +29,7 @@ export const MOVES = {
 		held: ['held', 'back'],
 		back: ['back']
 	},
+	clean: stays(HERE),
 	hold: { pulled: ['held'], shelved: ['held'] },
 	free: { held: ['pulled', 'shelved'] },
 	fit: { pulled: ['out'], shelved: ['out'], held: ['out'] },
@@ -55,6 +56,7 @@ export const NEEDS: Record<Move, Ability> = {
 	edit: 'work',
 	photo: 'work',
 	prove: 'work',
+	clean: 'work',
 	hold: 'hold',
 	free: 'hold',
 	fit: 'hold',

@@ -21,10 +21,13 @@ export function answersTheSame(one: Queued, other: Queued): boolean {
 }
 
 /** Pulled or shelved and promised to nobody. */
-const stands = (part: Queued) =>
+export const stands = (part: Pick<Queued, 'state' | 'inRedBin'>) =>
 	(part.state === 'pulled' || part.state === 'shelved') && !part.inRedBin;
 
-function goesBefore(other: Queued, part: Queued): boolean {
+type Standing = Pick<Queued, 'id' | 'grade' | 'pulledAt'>;
+
+/** Equal or better grades first, at equal grade the older. */
+export function goesBefore(other: Standing, part: Standing): boolean {
 	const by = GRADES.indexOf(other.grade) - GRADES.indexOf(part.grade);
 	if (by !== 0) return by < 0;
 	return other.pulledAt - part.pulledAt === 0 ? other.id < part.id : other.pulledAt < part.pulledAt;

@@ -11,6 +11,8 @@ export interface PlanStep extends PullStep {
 	goesWith: string | null;
 	/** What it is given up for, though it would be worth keeping. */
 	givenUpFor: string[];
+	/** Who waits for it: a customer (W12); null where nobody does. */
+	waitingFor: string | null;
 }
 
 /** A part that stays on, with what adding it would take and bring. */
@@ -26,6 +28,7 @@ export interface PlanBelow {
 	sacrificedFor: string[];
 	/** What is kept and would be spoiled by it. */
 	spoils: string[];
+	waitingFor: string | null;
 }
 
 /** The pull plan of a donor as a page shows it. */

@@ -13,12 +13,15 @@ const WITH_MACHINE: readonly EngineClass[] = ['SA', 'TR', 'GE', 'PW'];
 
 /**
  * The kinds to plan with: an engine is taken in without the mower or the snow thrower around it, so
- * parts of those count only where the shop has a price for them on it.
+ * parts of those count only where the shop has a price for them on it or somebody waits for one.
  */
 export const plannable = (subjects: readonly VerdictSubject[], engineClass: EngineClass) =>
 	subjects.filter(
 		(one) =>
-			one.price !== null || kind(one.kind).system !== MACHINE || WITH_MACHINE.includes(engineClass)
+			one.price !== null ||
+			one.waiting ||
+			kind(one.kind).system !== MACHINE ||
+			WITH_MACHINE.includes(engineClass)
 	);
 
 /** The price in the middle of what new ones of a kind cost; such bands are wide, so by ratio. */
@@ -46,16 +49,18 @@ export interface PlanPart {
 	/** Counted at the middle of what its kind costs: it has no price yet. */
 	rough: boolean;
 	never: boolean;
+	waitingFor: string | null;
 }
 
 /** What keeping a kind of this donor is worth once it is off; one without a price counts roughly. */
 export function planPart(subject: VerdictSubject, policy: ShopFigures, season: Season): PlanPart {
 	const off = { ...subject, stillOn: false };
-	const { verdict } = verdictOf(off, policy, season, false);
+	const { verdict, waitingFor } = verdictOf(off, policy, season, false);
 	const id = subject.kind;
-	if (verdict === 'never') return { id, gainCents: 0, rough: false, never: true };
+	if (verdict === 'never') return { id, gainCents: 0, rough: false, never: true, waitingFor: null };
 	const { gainCents } = verdictOf(roughlyPriced(off), policy, season, false);
-	return { id, gainCents: gainCents ?? 0, rough: subject.price === null, never: false };
+	const rough = subject.price === null;
+	return { id, gainCents: gainCents ?? 0, rough, never: false, waitingFor };
 }
 
 function toPull({ id, gainCents }: PlanPart, policy: ShopFigures): PullPart {
@@ -121,13 +126,15 @@ export function planOf(
 		const why = step.keep
 			? { opens: [], givenUpFor: [], goesWith: null }
 			: whyOff(part, plan.order, there);
-		return { ...step, ...why, kindName: nameOf(step.id), rough: step.keep && part.rough };
+		const rough = step.keep && part.rough;
+		return { ...step, ...why, kindName: nameOf(step.id), rough, waitingFor: part.waitingFor };
 	});
 	const below = plan.below.flatMap((left): PlanBelow[] => {
 		const part = known.get(left.id)!;
 		if (part.never) return [];
 		const goesWith = wholeOf(left.id, kept);
-		const said = { kindName: nameOf(left.id), rough: part.rough, goesWith };
+		const { rough, waitingFor } = part;
+		const said = { kindName: nameOf(left.id), rough, goesWith, waitingFor };
 		return [{ ...left, ...said, ...sacrifices(left.id, plan.order, kept) }];
 	});
 	const unpriced = parts.filter(({ rough }) => rough).length;

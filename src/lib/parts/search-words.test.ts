@@ -18,6 +18,11 @@ it('holds words without their plural, numbers whole and in pieces, sizes in mill
 	);
 });
 
+it('finds teeth that were counted by the word alone too', () => {
+	const words = searchWords({ ...part, note: 'pinion of 10 teeth' }).split(' ');
+	expect(words).toEqual(expect.arrayContaining(['10tooth', 'tooth']));
+});
+
 it('of a donor holds the plate and the displacement', () => {
 	const words = engineLexemes({
 		...{ maker: 'Ondrake', model: 'HX 270V', typeCode: '0044', dateCode: '', serial: '19I4-77' },

@@ -13,5 +13,7 @@ export interface Searchable {
 export function searchWords({ label, numbers, note, engine, set }: Searchable): string {
 	const whole = [...numbers, engine].map(numberKey).filter((key) => /\d/.test(key));
 	const rest = lexemesOf(label, ...numbers, engine, note, set).split(' ');
-	return [...new Set([...whole, ...rest])].filter(Boolean).join(' ');
+	// who counted them may be asked for the word alone
+	const counted = rest.some((lexeme) => /^\d+tooth$/.test(lexeme)) ? ['tooth'] : [];
+	return [...new Set([...whole, ...rest, ...counted])].filter(Boolean).join(' ');
 }

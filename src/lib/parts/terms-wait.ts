@@ -47,7 +47,9 @@ export function waitTerms(basis: Basis): VerdictTerm[] {
 	];
 	if (subject.waiting)
 		rows.push({
-			said: 'Somebody waits and takes it',
+			said: subject.waitingFor
+				? `Somebody waits: ${subject.waitingFor}; takes it`
+				: 'Somebody waits and takes it',
 			value: input.waiting ?? 0,
 			unit: 'share',
 			source: from(policy, (p) => p.waitingChance)

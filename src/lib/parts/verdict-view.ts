@@ -30,6 +30,8 @@ export interface VerdictSubject {
 	engineKey?: string;
 	/** A customer waits whom no unit on the shelf answers. */
 	waiting: boolean;
+	/** Who waits, without a name: a customer (W12). */
+	waitingFor?: string | null;
 }
 
 export interface VerdictPrice {
@@ -90,6 +92,8 @@ export interface Verdict {
 	waitYears: number | null;
 	everCalled: number | null;
 	belowLeast: boolean;
+	/** Who waits for it, without a name; null where nobody does. */
+	waitingFor: string | null;
 	/** Empty for those who may not see them. */
 	terms: VerdictTerm[];
 	figures: { input: GainInput; terms: Terms } | null;

@@ -84,7 +84,8 @@ function common(subject: VerdictSubject, grade: Grade, worked: Worked, policy: S
 		stale: price?.stale ?? false,
 		scrapCents: Math.round(worked.input.scrapCents),
 		waitYears,
-		everCalled
+		everCalled,
+		waitingFor: (subject.waiting && subject.waitingFor) || null
 	};
 }
 

@@ -1,3 +1,4 @@
+import type { AgeClock } from '../bins/age';
 import type { PhotoLinks } from '$lib/photos/links';
 import type { Grade, PartState, ProofWay } from './words';
 import type { Verdict } from './verdict-view';
@@ -24,12 +25,23 @@ export interface PartItem {
 	/** Address of a small picture. */
 	photo: string | null;
 	heldBy: string | null;
+	/** What is missing from its set; '' where nothing is. */
+	setMissing: string;
+}
+
+/** One figure of a test, such as 18 A free run. */
+export interface ProofFigure {
+	field: string;
+	value: number;
+	unit: string;
 }
 
 export interface ProofView {
 	how: ProofWay;
 	figure: number | null;
 	unit: string;
+	/** All that was read; the first one is `figure`. */
+	figures: ProofFigure[];
 	note: string;
 	passed: boolean;
 	by: string;
@@ -59,7 +71,6 @@ export interface PartView extends Omit<PartItem, 'photo'> {
 	system: string;
 	numbers: string[];
 	set: string;
-	setMissing: string;
 	checklist: string[];
 	massGrams: number | null;
 	note: string;
@@ -75,8 +86,10 @@ export interface PartView extends Omit<PartItem, 'photo'> {
 	/** It failed or came back and nothing has proved it since. */
 	doubtful: boolean;
 	pulledAt: Date;
+	/** Of a kind that ages: how old, and when to look again. */
+	age: AgeClock | null;
 	proofs: ProofView[];
-	photos: { id: number; links: PhotoLinks; alt: string }[];
+	photos: { id: number; blur: string; links: PhotoLinks; alt: string }[];
 	history: Happening[];
 	worth: Verdict | null;
 	/** The next unit that would answer the same call. */
@@ -95,6 +108,18 @@ export interface KindStillOn {
 	minutes: number;
 	verdict: Verdict['verdict'] | null;
 	gainCents: number | null;
+	/** Who waits for it, without a name: a customer (W12). */
+	waitingFor: string | null;
 	/** Why it cannot become stock; null where it can. */
 	never: string | null;
+}
+
+/** What came of putting parts into one place. */
+export interface PutAwayDone {
+	/** The place as it is said: K3-1, the box of D12. */
+	to: string;
+	put: { tag: string; eventId: number }[];
+	/** Those that lay there already. */
+	there: string[];
+	refused: { tag: string; said: string }[];
 }

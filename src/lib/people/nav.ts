@@ -20,12 +20,28 @@ const GROUPS: readonly { title: string; places: readonly Place[] }[] = [
 			{ area: 'parts', label: 'Find', needs: 'see', first: true },
 			{ area: 'donors', label: 'Donors', needs: 'see', first: true },
 			{ area: 'bins', label: 'Bins', needs: 'see', first: true },
+			{ area: 'walks', label: 'Walks', needs: 'see' },
+			{ area: 'labels', label: 'Labels', needs: 'see' },
+			{ area: 'scan', label: 'Scan', needs: 'see', rare: true },
+			{ area: 'bins/red', label: 'Red bin', needs: 'see', rare: true },
 			{ area: 'parts/new', label: 'Log old stock', needs: 'work', rare: true }
 		]
 	},
 	{
 		title: 'Counter',
-		places: [{ area: 'prices', label: 'Prices', needs: 'see' }]
+		places: [
+			{ area: 'wants', label: 'Wants', needs: 'trade' },
+			{ area: 'customers', label: 'Customers', needs: 'trade', rare: true },
+			{ area: 'prices', label: 'Prices', needs: 'see' }
+		]
+	},
+	{
+		title: 'Yard',
+		places: [
+			{ area: 'scrap', label: 'Scrap runs', needs: 'work' },
+			{ area: 'register', label: 'Register', needs: 'work' },
+			{ area: 'scrap/waste', label: 'Used oil and old fuel', needs: 'work', rare: true }
+		]
 	},
 	{
 		title: 'Money',
@@ -36,7 +52,10 @@ const GROUPS: readonly { title: string; places: readonly Place[] }[] = [
 	},
 	{
 		title: 'Shop',
-		places: [{ area: 'people/shop', label: 'Shop settings', needs: 'run', rare: true }]
+		places: [
+			{ area: 'people/shop', label: 'Shop settings', needs: 'run', rare: true },
+			{ area: 'people/letters', label: 'Letters', needs: 'run', rare: true }
+		]
 	}
 ];
 
@@ -51,7 +70,12 @@ function placeAt(slug: string, path: string): string | undefined {
 }
 
 /** The bar of places: four on the phone, most on the desk; what a role cannot open is not offered. */
-export function navItems(slug: string, path: string, may: Abilities): NavItem[] {
+export function navItems(
+	slug: string,
+	path: string,
+	may: Abilities,
+	fresh: { wants: number } = { wants: 0 }
+): NavItem[] {
 	const at = placeAt(slug, path);
 	const places = GROUPS.flatMap((group) => group.places).filter(
 		({ needs, rare }) => may[needs] && !rare
@@ -60,12 +84,22 @@ export function navItems(slug: string, path: string, may: Abilities): NavItem[] 
 		href: `/${slug}/${area}`,
 		label,
 		current: at === area || (at?.startsWith(`${area}/`) ?? false),
-		...(first ? {} : { where: 'desk' })
+		...(first ? {} : { where: 'desk' }),
+		...(area === 'wants' && fresh.wants > 0 ? { count: { number: fresh.wants, said: 'new' } } : {})
 	}));
-	const known = items.some(({ current, where }) => current && !where);
-	const more = { href: `/${slug}/people`, label: 'More', current: at !== undefined && !known };
-	return [...items, more];
+	const more = (where: 'phone' | 'desk'): NavItem => ({
+		href: `/${slug}/people`,
+		label: 'More',
+		where,
+		current: at !== undefined && !items.some((one) => one.current && shows(one, where)),
+		...(where === 'phone' && fresh.wants > 0
+			? { count: { number: fresh.wants, said: fresh.wants === 1 ? 'new want' : 'new wants' } }
+			: {})
+	});
+	return [...items, more('phone'), more('desk')];
 }
+
+const shows = ({ where }: NavItem, on: 'phone' | 'desk') => where === undefined || where === on;
 
 /** The places that are not on the phone's bar, by where they are used. */
 export const morePlaces = (slug: string, may: Abilities) =>

@@ -13,6 +13,7 @@ export type FigureUnit =
 	| 'tests'
 	| 'parts out'
 	| 'calls'
+	| 'donors'
 	| 'sales';
 
 /** One figure of the policy as the page asks for it. */
@@ -90,6 +91,14 @@ export const FIGURE_GROUPS: readonly FigureGroup[] = [
 				'per cent',
 				'From memory; no source'
 			)
+		]
+	},
+	{
+		title: 'What stands in the yard',
+		lead: 'A parked donor counts as stock of all that is still on it. Room and memory run out first.',
+		figures: [
+			figure(['parkedMost'], 'Parked at most', 'donors'),
+			figure(['parkedReviewDays'], 'Looked at again after', 'days')
 		]
 	},
 	{

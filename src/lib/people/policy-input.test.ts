@@ -15,7 +15,7 @@ const saved = (typed: Record<string, string>, before: Policy = DEFAULT_POLICY) =
 
 describe('the page of figures', () => {
 	it('asks for every number of the policy but scrap, families and kinds, each once', () => {
-		const { scrapKgCents: _s, families: _f, kinds: _k, ...numbers } = DEFAULT_POLICY;
+		const { scrapKgCents: _s, families: _f, kinds: _k, limits: _l, ...numbers } = DEFAULT_POLICY;
 		const all = Object.values(numbers).flatMap((value) =>
 			typeof value === 'number' ? [value] : Object.values(value)
 		);

@@ -26,6 +26,7 @@ const RANGE: Record<FigureUnit, Range> = {
 	tests: WEIGHT,
 	'parts out': WEIGHT,
 	calls: WEIGHT,
+	donors: { least: 1, most: 1000, whole: true },
 	sales: WEIGHT
 };
 
@@ -110,7 +111,8 @@ export function policyOf(before: Policy, form: PolicyForm, currency: string): Po
 	const after = structuredClone({
 		...DEFAULT_POLICY,
 		families: before.families,
-		kinds: before.kinds
+		kinds: before.kinds,
+		limits: before.limits
 	});
 	for (const figure of FIGURES) {
 		const field = fieldOf(figure);

@@ -22,6 +22,8 @@ export const KindFigures = z
 	.partial();
 export type KindFigures = z.infer<typeof KindFigures>;
 
+const TestLimit = z.object({ least: z.number(), most: z.number() }).partial();
+
 /** How many of an engine family are about; an ordinary one is not listed. */
 export const FAMILY_FACTOR = { lots: 3, some: 1, hardly: 0.3 } as const;
 export type FamilyMark = keyof typeof FAMILY_FACTOR;
@@ -54,6 +56,9 @@ export const Policy = z.object({
 	dyingRateAgeing: yearly,
 	ownJobShare: share,
 	staleDays: z.number().int().min(1).max(3650),
+	/** How many donors may stand parked, and after how many days each is looked at again. */
+	parkedMost: z.number().int().min(1).max(1000),
+	parkedReviewDays: z.number().int().min(1).max(3650),
 	waitingChance: share,
 	/** Calls that a search which ended in nothing is worth. */
 	askedWorth: share,
@@ -81,7 +86,9 @@ export const Policy = z.object({
 	/** Scrap, cents a kilogram, by metal class; what is absent is the usual middle. */
 	scrapKgCents: z.record(z.string(), cents),
 	families: z.record(z.string(), z.enum(['lots', 'some', 'hardly'])),
-	kinds: z.record(z.string(), KindFigures)
+	kinds: z.record(z.string(), KindFigures),
+	/** The shop's own bounds of what tests read: by kind, by field of its test. */
+	limits: z.record(z.string(), z.record(z.string(), TestLimit))
 });
 export type Policy = z.infer<typeof Policy>;
 
@@ -102,6 +109,8 @@ export const DEFAULT_POLICY: Policy = {
 	dyingRateAgeing: 0.3,
 	ownJobShare: 0.9,
 	staleDays: 180,
+	parkedMost: 20,
+	parkedReviewDays: 180,
 	waitingChance: 0.7,
 	askedWorth: 0.2,
 	chances: { high: 0.9, medium: 0.6, low: 0.2, ruined: 0.02 },
@@ -115,7 +124,8 @@ export const DEFAULT_POLICY: Policy = {
 	priors: { chance: 4, comeBacks: 20, calls: 10, shareSales: 5 },
 	scrapKgCents: {},
 	families: {},
-	kinds: {}
+	kinds: {},
+	limits: {}
 };
 
 /** The shop's own figures laid over the defaults, one level deep where a figure has parts. */

@@ -1,32 +1,43 @@
-export interface Outgoing {
-	/** Made once per photo, so that a photo sent twice is kept once. */
-	key: string;
-	file: File;
-	shot: string;
+import type { Answer, WaitingPhoto } from './waiting';
+
+interface Told {
+	message?: unknown;
 }
 
-const LOST = 'The photo did not arrive. Send it again.';
+function answerOf(request: XMLHttpRequest): Answer {
+	const told: Told | null = request.response;
+	const after = Number(request.getResponseHeader('retry-after'));
+	return {
+		status: request.status,
+		...(typeof told?.message === 'string' ? { message: told.message } : {}),
+		...(after > 0 ? { after } : {})
+	};
+}
 
-/** Sends one photo by itself; `onShare` hears how much of it has gone, 0 to 1. */
+/** Sends one photo by itself; `onShare` hears how much of it has gone, 0 to 1. Status 0: nothing came back. */
 export function sendPhoto(
-	api: string,
-	{ key, file, shot }: Outgoing,
+	photo: WaitingPhoto,
+	body: Blob,
 	onShare: (share: number) => void
-): Promise<void> {
-	return new Promise((done, fail) => {
+): Promise<Answer> {
+	return new Promise((done) => {
 		const request = new XMLHttpRequest();
 		const form = new FormData();
-		form.append('file', file);
-		if (shot) form.append('shot', shot);
-		request.open('POST', api);
+		form.append('file', body, photo.file);
+		if (photo.shot) form.append('shot', photo.shot);
+		for (const [name, value] of Object.entries(photo.fields ?? {})) form.append(name, value);
+		request.open('POST', photo.api);
 		request.responseType = 'json';
-		request.setRequestHeader('Idempotency-Key', key);
+		request.timeout = 5 * 60_000;
+		request.setRequestHeader('Idempotency-Key', photo.key);
+		request.setRequestHeader('Photo-Taken-By', photo.person);
 		request.upload.onprogress = ({ lengthComputable, loaded, total }) => {
 			if (lengthComputable) onShare(loaded / total);
 		};
-		request.onload = () =>
-			request.status < 300 ? done() : fail(new Error(request.response?.message ?? LOST));
-		request.onerror = () => fail(new Error(LOST));
+		request.onload = () => done(answerOf(request));
+		request.onerror = request.ontimeout = () => done({ status: 0 });
 		request.send(form);
 	});
 }
+
+export type Send = typeof sendPhoto;

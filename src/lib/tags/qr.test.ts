@@ -10,13 +10,14 @@ it('an address of up to 29 characters is a code of 25 modules and its quiet zone
 
 it('the quiet zone is four modules wide and the three eyes are drawn', () => {
 	const { size, path } = drawQr('HTTP://SHOP.EXAMPLE/T/AB/K7M3X');
-	const dark = new Set([...path.matchAll(/M(\d+) (\d+)h/g)].map(([, x, y]) => `${x},${y}`));
-	const columns = [...dark].map((at) => Number(at.split(',')[0]));
-	expect([Math.min(...columns), Math.max(...columns)]).toEqual([4, size - 5]);
-	for (const [x, y] of [
+	const runs = [...path.matchAll(/M(\d+) (\d+)h(\d+)v1/g)].map((run) => run.slice(1).map(Number));
+	const starts = runs.map(([x]) => x!);
+	const ends = runs.map(([x, , wide]) => x! + wide!);
+	expect([Math.min(...starts), Math.max(...ends)]).toEqual([4, size - 4]);
+	const eyes = [
 		[4, 4],
-		[size - 5, 4],
-		[4, size - 5]
-	])
-		expect(dark.has(`${x},${y}`)).toBe(true);
+		[size - 11, 4],
+		[4, size - 11]
+	];
+	for (const [x, y] of eyes) expect(runs).toContainEqual([x, y, 7]);
 });

@@ -7,15 +7,24 @@ export const scanAddress = (origin: string, shopSlug: string, tag: string): stri
 export interface QrDrawing {
 	/** Modules along a side, the quiet zone of four on each side included. */
 	size: number;
-	/** The dark modules, as the path of an SVG of that size. */
+	/** The dark modules, as the path of an SVG of that size: one box for each run in a row. */
 	path: string;
+}
+
+function runsOf(row: readonly boolean[], y: number): string {
+	let path = '';
+	for (let x = 0; x < row.length; x += 1) {
+		if (!row[x]) continue;
+		let end = x;
+		while (row[end]) end += 1;
+		path += `M${x} ${y}h${end - x}v1h-${end - x}z`;
+		x = end;
+	}
+	return path;
 }
 
 /** A QR code at level Q: it still reads with a quarter of it smeared. */
 export function drawQr(text: string): QrDrawing {
 	const { data, size } = encode(text, { ecc: 'Q', border: 4, boostEcc: false });
-	const path = data
-		.flatMap((row, y) => row.map((dark, x) => (dark ? `M${x} ${y}h1v1h-1z` : '')))
-		.join('');
-	return { size, path };
+	return { size, path: data.map(runsOf).join('') };
 }

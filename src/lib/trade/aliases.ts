@@ -8,7 +8,7 @@ export interface Alias {
 }
 
 // names that open with a word for something else
-const NEVER_SHORT: readonly string[] = ['brake', 'pulley', 'keyswitch', 'cable'];
+const NEVER_SHORT: readonly string[] = ['brake', 'pulley', 'keyswitch', 'cable', 'vcover'];
 
 function aliasesOf(each: Kind): Alias[] {
 	const short = NEVER_SHORT.includes(each.id) ? each.name : each.name.split(/[,/(]/)[0];

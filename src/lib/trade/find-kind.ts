@@ -1,6 +1,6 @@
 import { ALIASES, BY_SOUND, VOCABULARY, type Alias } from './aliases';
 import type { Kind } from './kind';
-import { editsBetween, soundOf, wordsOf } from './spelling';
+import { editsBetween, lettersOf, mayBeNear, soundOf, wordsOf } from './spelling';
 
 export type MatchedHow = 'name' | 'called' | 'sounds' | 'near';
 
@@ -22,13 +22,31 @@ interface Reached {
 
 const RANK: Record<MatchedHow, number> = { name: 0, called: 0, sounds: 1, near: 2 };
 
+const LETTERS = [...VOCABULARY]
+	.filter((known) => known.length >= 3)
+	.map((known) => [known, lettersOf(known)] as const);
+
+const byFirst = new Map<string, Alias[]>();
+for (const alias of ALIASES) {
+	const [first = ''] = alias.words;
+	byFirst.set(first, [...(byFirst.get(first) ?? []), alias]);
+}
+const rank = new Map(ALIASES.map((alias, at) => [alias, at]));
+
+/** The names that may be meant: those whose first word was reached, in the order of the trade. */
+const namesWith = (reached: ReadonlyMap<string, Reached>): Alias[] =>
+	[...reached.keys()]
+		.flatMap((word) => byFirst.get(word) ?? [])
+		.sort((a, b) => rank.get(a)! - rank.get(b)!);
+
 function nearWords(word: string): string[] {
 	const most = word.length >= 7 ? 2 : word.length >= 4 ? 1 : 0;
 	if (most === 0) return [];
 	let least = most;
 	let nearest: string[] = [];
-	for (const known of VOCABULARY) {
-		if (known.length < 3) continue;
+	const letters = lettersOf(word);
+	for (const [known, theirs] of LETTERS) {
+		if (!mayBeNear(letters, theirs, least)) continue;
 		const edits = editsBetween(word, known, least);
 		if (edits > least) continue;
 		nearest = edits < least ? [known] : [...nearest, known];
@@ -46,9 +64,11 @@ function reachedBy(words: readonly string[]): Map<string, Reached> {
 	words.forEach((word, place) => {
 		if (VOCABULARY.has(word) || /\d/.test(word)) return;
 		const heard = BY_SOUND.get(soundOf(word)) ?? [];
+		// where one sounds the same, another first letter is no slip of this word
+		const near = nearWords(word).filter((known) => heard.length === 0 || known[0] === word[0]);
 		const found = [
 			...heard.map((known) => ({ known, how: 'sounds' as const })),
-			...nearWords(word).map((known) => ({ known, how: 'near' as const }))
+			...near.map((known) => ({ known, how: 'near' as const }))
 		];
 		for (const { known, how } of found) {
 			if (!reached.has(known)) reached.set(known, { place, how });
@@ -110,7 +130,9 @@ function byFit(words: readonly string[]): (a: Hit, b: Hit) => number {
 export function matchKinds(text: string): KindMatch[] {
 	const words = wordsOf(text);
 	const reached = reachedBy(words);
-	const hits = ALIASES.map((alias) => hitOf(alias, reached)).filter((hit) => hit !== null);
+	const hits = namesWith(reached)
+		.map((alias) => hitOf(alias, reached))
+		.filter((hit) => hit !== null);
 	const matches = new Map<string, KindMatch>();
 	for (const { alias, how } of unclaimed(withoutIdleGuesses(hits)).sort(byFit(words))) {
 		if (!matches.has(alias.kind.id)) matches.set(alias.kind.id, { kind: alias.kind, how });

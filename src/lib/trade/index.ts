@@ -33,3 +33,23 @@ export { whyChance } from './why';
 export { matchKinds, type KindMatch, type MatchedHow } from './find-kind';
 export { kindWords } from './aliases';
 export { findScrapClass, SCRAP_CLASSES, scrapCentsPerGram } from './scrap';
+export {
+	testFields,
+	testsHot,
+	testsInPlace,
+	type InPlaceNow,
+	type Limit,
+	type Limits
+} from './bench-test';
+export { boundsSaid, outside, type TestField } from './bounds';
+export { setOf } from './sets';
+export {
+	mayCrank,
+	TRIAGE,
+	triage,
+	triageFor,
+	type Suggestion,
+	type TriageAnswers,
+	type TriageCaution,
+	type Triaged
+} from './triage';

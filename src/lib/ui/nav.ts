@@ -4,4 +4,6 @@ export interface NavItem {
 	label: string;
 	current?: boolean;
 	where?: 'phone' | 'desk';
+	/** How much is new there, said beside the label. */
+	count?: { number: number; said: string };
 }

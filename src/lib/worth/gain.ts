@@ -51,3 +51,9 @@ export function gain(input: GainInput): Gain {
 		terms
 	};
 }
+
+/**
+ * The gain alone, for long lists: `gainCents` of gain() to the cent. In: see GainInput. Out: whole
+ * cents. Throws WorthError naming the field.
+ */
+export const gainCents = (input: GainInput): number => wholeCents(bestGain(gainFigures(input)));

@@ -6,7 +6,7 @@ export { WorthError } from './worth-error';
 export { yearlyToContinuous } from './rates';
 export { usedPrice, type Step, type UsedPrice, type UsedPriceInput } from './used-price';
 export { ownUse, type OwnUseInput } from './own-use';
-export { gain, type Gain } from './gain';
+export { gain, gainCents, type Gain } from './gain';
 export type { GainInput } from './gain-input';
 export type { Terms } from './values';
 export { verdictWord, type VerdictWord } from './verdict';

@@ -4,6 +4,7 @@ import { step } from '../say.js';
 import { seed } from '../seed.js';
 import { startServer } from '../server.js';
 import { ensureChromium } from './chromium.js';
+import { ensureDecoders } from './decoders.js';
 import { dataDir, freshDatabase } from './places.js';
 import { journeys } from './stages.js';
 
@@ -14,6 +15,7 @@ import { journeys } from './stages.js';
  */
 export async function e2e(place, stopping) {
 	const chromium = await ensureChromium();
+	await ensureDecoders();
 	await ensureBuild(dataDir);
 	const urls = await freshDatabase(place, 'endplay_e2e');
 	const port = await freePort();

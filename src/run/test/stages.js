@@ -4,11 +4,12 @@ import { root } from '../files.js';
 import { run } from '../processes.js';
 import { urlsOf } from '../roles.js';
 import { countPlaywright, countVitest } from './count.js';
+import { ensureDecoders } from './decoders.js';
 import { freshDatabase, reports } from './places.js';
 
 /** @typedef {import('./count.js').Count} Count */
 
-const longest = 5 * 60 * 1000;
+const longest = 25 * 60 * 1000;
 
 /**
  * Runs one of the npm packages' programs; shows what it said when it failed.
@@ -59,6 +60,7 @@ export const pure = () => vitest('pure');
 
 /** @param {import('./places.js').Place} place */
 export async function server(place) {
+	await ensureDecoders();
 	const template = 'endplay_template';
 	await freshDatabase(place, template);
 	const urls = urlsOf(place.admin, 'DATABASE', place.secrets);

@@ -87,14 +87,11 @@ const inSql =
 		const plan = readSearch(typed);
 		const { rows } = await client.query({
 			name: 'find',
-			text: 'select find_parts($1::json) as answer',
+			text: 'select find_on_shelf($1::json) as answer',
 			values: [questionOf(shop, plan, FindQuery.parse({ q: typed }), DEFAULT_POLICY)]
 		});
-		const { page, total } = rows[0].answer as {
-			page: { part: { id: number } }[] | null;
-			total: number;
-		};
-		return { ids: (page ?? []).map(({ part }) => part.id), total };
+		const { page, total } = rows[0].answer as { page: { id: number }[] | null; total: number };
+		return { ids: (page ?? []).map(({ id }) => id), total };
 	};
 
 const ilike =

@@ -39,7 +39,7 @@ export const addBin = (ctx: Context, input: BinInput): Promise<BinView> =>
 				...input,
 				...place,
 				shopId: ctx.shopId,
-				tag: await mintTag(tx, ctx, 'bin'),
+				tag: await mintTag(tx, ctx, 'bin', input.tag),
 				createdAt: ctx.now
 			})
 			.onConflictDoNothing()

@@ -7,28 +7,44 @@ import { inShop, type Context } from '../context';
 import { alone } from '../db/alone';
 import { allow, record } from '../people';
 import { addressColumns, addressTaken, needOwnerForCost } from './add';
-import { findPlace, getBin, type BinRow } from './queries';
+import { findPlace, type BinRow } from './find-place';
+import { getBin } from './queries';
 import { bin } from './tables';
 
 const FIELDS = {
 	address: 'address',
 	size: 'size',
 	litres: 'litres',
+	loadKg: 'what it may carry',
+	uses: 'what it is kept for',
+	kinds: 'the kinds that belong here',
 	purpose: 'what it is for',
 	place: 'where it stands',
 	red: 'red bin'
 } as const;
 
-const say = (value: unknown) =>
-	value === null || value === undefined || value === '' ? 'nothing' : `“${value}”`;
+const plain = (value: unknown) => (Array.isArray(value) ? value.join(', ') : String(value ?? ''));
+const say = (value: unknown) => (plain(value) === '' ? 'nothing' : `“${plain(value)}”`);
+
+const differing = (row: BinRow, typed: Partial<BinRow>) =>
+	(Object.keys(FIELDS) as (keyof typeof FIELDS)[]).filter(
+		(field) => typed[field] !== undefined && plain(row[field]) !== plain(typed[field])
+	);
 
 /** What differs, both values of each said. */
 function bothSaid(row: BinRow, typed: Partial<BinRow>): string {
-	return (Object.keys(FIELDS) as (keyof typeof FIELDS)[])
-		.filter((field) => (row[field] ?? null) !== (typed[field] ?? null))
+	return differing(row, typed)
 		.map((field) => `${FIELDS[field]} is now ${say(row[field])}, you typed ${say(typed[field])}`)
 		.join('; ');
 }
+
+/** What stood there before, of all that changed. */
+const stoodBefore = (row: BinRow, set: Partial<BinRow>) =>
+	Object.fromEntries(
+		(Object.keys(set) as (keyof BinRow)[])
+			.filter((key) => set[key] !== undefined && plain(set[key]) !== plain(row[key]))
+			.map((key) => [key, row[key]])
+	);
 
 export const editBin = (ctx: Context, ref: string, input: BinEdit): Promise<BinView> =>
 	inShop(ctx, async (tx, ctx) => {
@@ -36,7 +52,7 @@ export const editBin = (ctx: Context, ref: string, input: BinEdit): Promise<BinV
 		const row = await findPlace(tx, ctx, ref, 'no key update');
 		if (!row) throw new NotFound();
 		const { version, yearlyCostCents, ...rest } = input;
-		const typed = { ...rest, litres: rest.litres ?? null, ...addressColumns(input.address) };
+		const typed = { ...rest, ...addressColumns(input.address) };
 		if (row.version !== version)
 			throw new Refused(
 				'changed',
@@ -53,7 +69,7 @@ export const editBin = (ctx: Context, ref: string, input: BinEdit): Promise<BinV
 			about: 'bin',
 			aboutId: row.id,
 			what: 'edited',
-			detail: { ...typed, ...cost }
+			detail: { ...typed, ...cost, before: stoodBefore(row, { ...typed, ...cost }) }
 		});
 		return getBin(ctx, typed.address);
 	});

@@ -4,11 +4,15 @@ import { inShop, type Context } from '../context';
 import { alone } from '../db/alone';
 import { allow, record } from '../people';
 import { addressTaken } from './add';
-import { findPlace, getBin } from './queries';
+import { findPlace } from './find-place';
+import { getBin } from './queries';
 import { bin } from './tables';
 
 /** Takes an empty bin out of use; its address is free again. Returns its tag, to bring it back by. */
-export const retireBin = (ctx: Context, ref: string): Promise<{ tag: string; address: string }> =>
+export const retireBin = (
+	ctx: Context,
+	ref: string
+): Promise<{ tag: string; address: string; eventId: number }> =>
 	inShop(ctx, async (tx, ctx) => {
 		allow(ctx, 'work');
 		const row = await findPlace(tx, ctx, ref, 'no key update');
@@ -23,14 +27,14 @@ export const retireBin = (ctx: Context, ref: string): Promise<{ tag: string; add
 			.update(bin)
 			.set({ retiredAt: ctx.now, version: row.version + 1 })
 			.where(and(eq(bin.shopId, ctx.shopId), eq(bin.id, row.id)));
-		await record(tx, ctx, {
+		const eventId = await record(tx, ctx, {
 			about: 'bin',
 			aboutId: row.id,
 			what: 'retired',
 			fromState: 'in use',
 			toState: 'retired'
 		});
-		return { tag: row.tag, address: row.address };
+		return { tag: row.tag, address: row.address, eventId };
 	});
 
 /** Brings a retired bin back into use under its address. */

@@ -1,4 +1,5 @@
 import { BIN_SIZES } from '../../bins/size';
+import { BIN_USES, type BinUse } from '../../bins/use';
 import { sql } from 'drizzle-orm';
 import {
 	boolean,
@@ -12,7 +13,7 @@ import {
 	unique,
 	uniqueIndex
 } from 'drizzle-orm/pg-core';
-import { idColumn, shopColumn, time, words } from '../db/columns';
+import { emptyArray, idColumn, shopColumn, textArray, time, words } from '../db/columns';
 import { shop } from '../people/tables';
 import { tag } from '../tags/tables';
 
@@ -28,7 +29,12 @@ export const bin = pgTable(
 		slot: integer('slot'),
 		size: text('size', { enum: BIN_SIZES }).notNull(),
 		litres: doublePrecision('litres'),
+		/** What it may carry, all together. */
+		loadKg: doublePrecision('load_kg'),
 		yearlyCostCents: integer('yearly_cost_cents'),
+		uses: textArray('uses').$type<BinUse[]>().notNull().default(emptyArray),
+		/** The kinds that are named for it. */
+		kinds: textArray('kinds').notNull().default(emptyArray),
 		purpose: text('purpose').notNull().default(''),
 		place: text('place').notNull().default(''),
 		red: boolean('red').notNull().default(false),
@@ -45,6 +51,8 @@ export const bin = pgTable(
 		foreignKey({ columns: [t.shopId, t.tag], foreignColumns: [tag.shopId, tag.code] }),
 		check('bin_size', sql`${t.size} in (${words(BIN_SIZES)})`),
 		check('bin_litres', sql`${t.litres} > 0`),
+		check('bin_load', sql`${t.loadKg} > 0`),
+		check('bin_uses', sql`${t.uses} <@ array[${words(BIN_USES)}]`),
 		check('bin_cost', sql`${t.yearlyCostCents} >= 0`)
 	]
 );

@@ -10,14 +10,19 @@ import { box, donorPhoto, release } from './tables';
 
 export interface Around {
 	boxes: { donorId: number; tag: string }[];
-	photos: { donorId: number; id: number; shot: DonorShot }[];
+	photos: { donorId: number; id: number; shot: DonorShot; blur: string }[];
 	releases: Map<number, ReleaseRow>;
 	parts: Map<number, number>;
 }
 
 const photosOf = (tx: Tx, ctx: Context, ids: number[]) =>
 	tx
-		.select({ donorId: donorPhoto.donorId, id: donorPhoto.photoId, shot: donorPhoto.shot })
+		.select({
+			donorId: donorPhoto.donorId,
+			id: donorPhoto.photoId,
+			shot: donorPhoto.shot,
+			blur: photo.blur
+		})
 		.from(donorPhoto)
 		.innerJoin(photo, and(eq(photo.shopId, donorPhoto.shopId), eq(photo.id, donorPhoto.photoId)))
 		.where(

@@ -7,23 +7,28 @@ import sharp from 'sharp';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { inShop, type Context } from '../context';
 import { testShops, type TestShop } from '../../../../tests/support/shops';
+import { editPolicy } from '../people';
 import { event } from '../people/tables';
 import { keepPhoto } from '../photos';
 import { findTag } from '../tags';
 import {
 	addBox,
 	addDonorPhoto,
+	bringBackDonor,
 	editDonor,
 	finishDonor,
 	getDonor,
+	leaveDonor,
 	listDonors,
 	listMakers,
+	notToLeave,
 	parkDonor,
 	pullableDonor,
 	putBackDonorPhoto,
 	releaseDonor,
 	removeDonorPhoto,
 	reopenDonor,
+	reviewDonor,
 	stripDonor,
 	takeIn,
 	tickSafe
@@ -161,14 +166,61 @@ describe('the way to the bench', () => {
 			finishDonor
 		];
 		for (const step of steps) {
-			await step(bench, number);
+			await step(bench, number, { reason: 'a bracket was left' });
 			expect(replay(await statesOf(bench, id))).toBe((await getDonor(bench, number)).state);
 		}
 		expect(await getDonor(bench, number)).toMatchObject({ state: 'stripped', todo: [] });
 		expect((await getDonor(bench, number)).strippedAt).not.toBeNull();
+		expect(await caught(reopenDonor(bench, number))).toMatchObject({ field: 'reason' });
 		expect(await caught(stripDonor(bench, number))).toMatchObject({
 			message: 'It is stripped. Only a donor that is whole or parked can do this.'
 		});
+	});
+
+	it('leaves for good once the release is in order, and comes back to where it left', async () => {
+		const held = await ready(ours.ctx, { holdUntil: '2099-01-01' });
+		for (const how of ['scrap', 'sell'] as const)
+			expect(String(await caught(leaveDonor(ours.ctx, held, how)))).toMatch(/Hold date/);
+		const number = await ready(ours.ctx);
+		const { id } = await getDonor(bench, number);
+		expect(await caught(leaveDonor(bench, number, 'sell'))).toMatchObject({ code: 'role' });
+		await stripDonor(bench, number);
+		expect(await caught(leaveDonor(bench, number, 'scrap'))).toMatchObject({ code: 'gate' });
+		await finishDonor(bench, number);
+		await leaveDonor(bench, number, 'scrap', { run: 1 });
+		expect(await getDonor(bench, number)).toMatchObject({ state: 'gone', todo: [] });
+		await bringBackDonor(bench, number, { reason: 'the ticket was wrong' });
+		expect((await getDonor(bench, number)).state).toBe('stripped');
+		expect(replay(await statesOf(bench, id))).toBe('stripped');
+		expect(await caught(bringBackDonor(bench, number, {}))).toMatchObject({ code: 'gate' });
+	});
+
+	it('a release passed by the owner stays passed until a newer one is recorded', async () => {
+		const number = await ready(ours.ctx, { holdUntil: '2099-01-01' });
+		await stripDonor(ours.ctx, number, { reason: 'the yard floods' });
+		const { id } = await getDonor(bench, number);
+		const gate = () => inShop(bench, (tx, ctx) => notToLeave(tx, ctx, id));
+		expect(await gate()).toBeNull();
+		await releaseDonor(bench, number, { ...own, holdUntil: '2098-01-01', because: 'wrong year' });
+		expect(await gate()).toMatch(/Hold date is 1 January 2098/);
+	});
+
+	it('so many may be parked, and each is looked at again', async () => {
+		const { ours } = await testShops();
+		await editPolicy(ours.ctx, { own: { parkedMost: 1, parkedReviewDays: 10 }, version: 0 });
+		const [one, two] = [await ready(ours.ctx), await ready(ours.ctx)];
+		await parkDonor(ours.ctx, one);
+		expect(await caught(parkDonor(ours.ctx, two))).toMatchObject({
+			message: expect.stringMatching(/^1 are parked already/)
+		});
+		const later = ours.at(new Date(ours.ctx.now.getTime() + 11 * 86_400_000));
+		const todo = async (ctx: Context) => (await getDonor(ctx, one)).todo.map(({ id }) => id);
+		expect(await todo(ours.ctx)).not.toContain('review');
+		expect(await todo(later)).toContain('review');
+		await reviewDonor(later, one);
+		expect(await todo(later)).not.toContain('review');
+		await reopenDonor(later, one);
+		await parkDonor(ours.ctx, two);
 	});
 
 	it('two at once: one puts it there, the other hears where it is', async () => {

@@ -5,6 +5,7 @@ import { SAFE_TICKS } from '$lib/trade';
 import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import { allow, record } from '../people';
+import { announceDonor, saysWhatItCarries } from './announce';
 import { donorColumns } from './columns';
 import { donorRow, type DonorRow } from './rows';
 import { donor } from './tables';
@@ -15,6 +16,7 @@ const SAID: Partial<Record<keyof DonorRow, string>> = {
 	typeCode: 'type',
 	dateCode: 'code',
 	serial: 'serial',
+	emissionFamily: 'emission family',
 	displacementCc: 'displacement',
 	shaft: 'shaft',
 	engineClass: 'class',
@@ -47,13 +49,15 @@ function needVersion(row: DonorRow, version: number | undefined, typed: Partial<
 	);
 }
 
-const save = (
+/** Writes what was said about a donor, with its event; `more` goes into the event too. Returns the event's number. */
+export const saveDonor = (
 	ctx: Context,
 	ref: string,
 	version: number | undefined,
 	columns: (row: DonorRow) => Partial<DonorRow>,
-	what: string
-) =>
+	what: string,
+	more: (row: DonorRow) => Record<string, unknown> = () => ({})
+): Promise<number> =>
 	inShop(ctx, async (tx, ctx) => {
 		allow(ctx, 'work');
 		const row = await donorRow(tx, ctx, ref, { lock: true });
@@ -63,21 +67,23 @@ const save = (
 			.update(donor)
 			.set({ ...typed, version: row.version + 1 })
 			.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, row.id)));
+		if (saysWhatItCarries(typed)) await announceDonor(tx, ctx, row.id, false);
 		const { paidCents: _, searchWords: _words, ...detail } = typed;
-		await record(tx, ctx, { about: 'donor', aboutId: row.id, what, detail });
+		return record(tx, ctx, {
+			about: 'donor',
+			aboutId: row.id,
+			what,
+			detail: { ...detail, ...more(row) }
+		});
 	});
 
-export const editDonor = (ctx: Context, ref: string, input: DonorEdit): Promise<void> =>
-	save(
-		ctx,
-		ref,
-		input.version,
-		(row) => donorColumns(ctx, input, row),
-		input.cause === undefined ? 'edited what it is' : 'named the cause of death'
-	);
+export async function editDonor(ctx: Context, ref: string, input: DonorEdit): Promise<void> {
+	const what = input.cause === undefined ? 'edited what it is' : 'named the cause of death';
+	await saveDonor(ctx, ref, input.version, (row) => donorColumns(ctx, input, row), what);
+}
 
 /** Sets the safe-to-store ticks, in the order they are done. */
-export const tickSafe = (ctx: Context, ref: string, input: SafeInput): Promise<void> => {
+export async function tickSafe(ctx: Context, ref: string, input: SafeInput): Promise<void> {
 	const ticks = SAFE_TICKS.map((tick) => tick.id).filter((id) => input.ticks.includes(id));
-	return save(ctx, ref, input.version, () => ({ safeTicks: ticks }), 'ticked what is safe');
-};
+	await saveDonor(ctx, ref, input.version, () => ({ safeTicks: ticks }), 'ticked what is safe');
+}

@@ -25,9 +25,10 @@ async function releaseView(tx: Tx, ctx: Context, row: ReleaseRow): Promise<Relea
 }
 
 const photoViews = (near: Around, engine: string, slug: string): DonorPhotoView[] =>
-	near.photos.map(({ id, shot }) => ({
+	near.photos.map(({ id, shot, blur }) => ({
 		id,
 		shot,
+		blur,
 		alt: `${engine}: ${SHOT_SAID[shot]}`,
 		links: photoLinks(slug, id)
 	}));
@@ -38,6 +39,7 @@ const identity = (row: DonorRow) => ({
 	typeCode: row.typeCode,
 	dateCode: row.dateCode,
 	serial: row.serial,
+	emissionFamily: row.emissionFamily,
 	displacementCc: row.displacementCc,
 	shaft: row.shaft,
 	fittings: row.fittings,

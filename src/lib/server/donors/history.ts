@@ -4,8 +4,10 @@ import type { Context } from '../context';
 import type { Tx } from '../db';
 import { event, member } from '../people/tables';
 
-const withReason = (what: string, detail: Record<string, unknown>) =>
-	typeof detail.reason === 'string' ? `${what}: ${detail.reason}` : what;
+const withReason = (what: string, { reason, said }: Record<string, unknown>) => {
+	const more = reason ?? said;
+	return typeof more === 'string' ? `${what}: ${more}` : what;
+};
 
 /** What happened to a donor, the newest first. */
 export async function donorEvents(tx: Tx, ctx: Context, donorId: number): Promise<DonorEvent[]> {

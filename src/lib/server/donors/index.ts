@@ -4,9 +4,21 @@
 export { addBox } from './boxes';
 export { editDonor, tickSafe } from './edit';
 export { getDonor } from './get';
+export { askReading } from './label-ask';
+export { listReadings } from './label-readings';
+export { takeLabel, undoTakeLabel } from './label-take';
 export { listDonors, listMakers, type DonorFilter, type DonorList } from './list';
+export { notToLeave } from './gates';
+export { bringBackDonor, leaveDonor, reviewDonor } from './leave';
 export { finishDonor, parkDonor, reopenDonor, stripDonor } from './moves';
-export { addDonorPhoto, addKeptPhoto, putBackDonorPhoto, removeDonorPhoto } from './photos';
+export {
+	addDonorPhoto,
+	addKeptPhoto,
+	changeShot,
+	putBackDonorPhoto,
+	removeDonorPhoto
+} from './photos';
+export { removedDonorPhotos } from './photos-away';
 export { releaseDonor } from './release';
 export {
 	donorRow,
@@ -19,3 +31,4 @@ export {
 	type ReleaseRow
 } from './rows';
 export { takeIn, type TakenIn } from './take-in';
+export { getTriage, saveTriage, undoTriage } from './triage';

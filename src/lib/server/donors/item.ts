@@ -34,6 +34,7 @@ export function donorItem(row: DonorRow, near: Around, slug: string, today: stri
 		takenInAt: row.takenInAt.toISOString(),
 		partCount: near.parts.get(row.id) ?? 0,
 		photo: first ? photoLinks(slug, first.id) : null,
+		blur: first?.blur ?? '',
 		todo: todoOf(row, release, shots, today)
 	};
 }

@@ -1,57 +1,48 @@
 import type { MoveInput } from '$lib/donors/input';
-import { afterMove, gatesShut, noMoveSaid, type DonorMove } from '$lib/donors/state';
+import { afterMove, noMoveSaid, type DonorMove } from '$lib/donors/state';
 import type { DonorState } from '$lib/donors/words';
-import { may } from '$lib/people/role';
 import { Refused } from '$lib/refusal';
-import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
-import type { Tx } from '../db';
-import { allow, record } from '../people';
-import { donorRow, newestRelease, todayIn, type DonorRow } from './rows';
-import { donor } from './tables';
+import { allow } from '../people';
+import { gatesOf, needReason, needRoom, passGates } from './gates';
+import { donorRow } from './rows';
+import { writeMove } from './write-move';
 
 const SAID: Record<DonorMove, string> = {
 	strip: 'put on the bench',
 	park: 'parked',
 	finish: 'finished stripping',
-	reopen: 'reopened'
+	reopen: 'reopened',
+	scrap: 'went to scrap',
+	sell: 'sold whole'
 };
 
-/** Refuses while a gate is shut. The owner passes the release and its hold date with a reason. */
-async function needGates(tx: Tx, ctx: Context, row: DonorRow, reason?: string): Promise<void> {
-	const release = await newestRelease(tx, ctx, row.id);
-	const shut = gatesShut(row, release, await todayIn(ctx)).filter(
-		(gate) => !(gate.overrulable && reason && may(ctx.role, 'run'))
-	);
-	if (shut.length === 0) return;
-	const hint =
-		may(ctx.role, 'run') && shut.some((gate) => gate.overrulable)
-			? ' You may overrule the release with a reason.'
-			: '';
-	throw new Refused('gate', shut.map((gate) => gate.said).join(' ') + hint, 'reason');
-}
-
 const stamped = (to: DonorState, now: Date) =>
-	to === 'stripped' ? { strippedAt: now } : { strippedAt: null };
+	to === 'gone' ? {} : { strippedAt: to === 'stripped' ? now : null };
 
-const move = (ctx: Context, ref: string, how: DonorMove, { reason }: MoveInput): Promise<void> =>
+export const move = (
+	ctx: Context,
+	ref: string,
+	how: DonorMove,
+	{ reason }: MoveInput,
+	more: Record<string, unknown> = {}
+): Promise<void> =>
 	inShop(ctx, async (tx, ctx) => {
-		allow(ctx, 'work');
+		allow(ctx, how === 'sell' ? 'trade' : 'work');
 		const row = await donorRow(tx, ctx, ref, { lock: true });
 		const to = afterMove(row.state, how);
 		if (!to) throw new Refused('gate', noMoveSaid(row.state, how));
-		if (to === 'on the bench') await needGates(tx, ctx, row, reason);
-		await tx
-			.update(donor)
-			.set({ state: to, ...stamped(to, ctx.now), version: row.version + 1 })
-			.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, row.id)));
-		await record(tx, ctx, {
-			about: 'donor',
-			aboutId: row.id,
+		needReason(row, how, reason);
+		const overruled = passGates(ctx, await gatesOf(tx, ctx, row, how), reason);
+		await writeMove(tx, ctx, row, {
+			to,
 			what: SAID[how],
-			fromState: row.state,
-			toState: to,
-			detail: reason ? { reason } : {}
+			set: {
+				...stamped(to, ctx.now),
+				...(overruled ? { gateOverruled: true } : {}),
+				...(to === 'parked' ? { reviewOn: await needRoom(tx, ctx) } : {})
+			},
+			detail: { ...more, ...(reason ? { reason } : {}) }
 		});
 	});
 

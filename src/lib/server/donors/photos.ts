@@ -1,3 +1,4 @@
+import { SHOT_SAID } from '$lib/donors/shots';
 import type { DonorShot } from '$lib/donors/words';
 import { NotFound } from '$lib/refusal';
 import { and, eq } from 'drizzle-orm';
@@ -71,6 +72,27 @@ const ofDonor = (
 			);
 		if (!row) throw new NotFound();
 		await what(ctx, id);
+	});
+
+/** Says anew what a photo shows. */
+export const changeShot = (ctx: Context, ref: string, photoId: number, shot: DonorShot) =>
+	inShop(ctx, async (tx, ctx) => {
+		allow(ctx, 'work');
+		const { id: donorId } = await donorRow(tx, ctx, ref, { lock: true });
+		const row = and(
+			...[eq(donorPhoto.shopId, ctx.shopId), eq(donorPhoto.donorId, donorId)],
+			eq(donorPhoto.photoId, photoId)
+		);
+		const [before] = await tx.select({ shot: donorPhoto.shot }).from(donorPhoto).where(row);
+		if (!before) throw new NotFound();
+		await tx.update(donorPhoto).set({ shot }).where(row);
+		const detail = { photo: photoId, shot, was: before.shot, said: SHOT_SAID[shot] };
+		await record(tx, ctx, {
+			about: 'donor',
+			aboutId: donorId,
+			what: 'said what a photo shows',
+			detail
+		});
 	});
 
 export const removeDonorPhoto = (ctx: Context, ref: string, id: number) =>

@@ -1,6 +1,7 @@
 import { DONOR_SHOTS, DONOR_STATES, RELEASE_ROUTES, SHAFTS, SURENESS } from '../../donors/words';
 import { sql } from 'drizzle-orm';
 import {
+	boolean,
 	check,
 	date,
 	doublePrecision,
@@ -10,12 +11,16 @@ import {
 	pgTable,
 	primaryKey,
 	text,
-	unique
+	unique,
+	uniqueIndex
 } from 'drizzle-orm/pg-core';
 import { emptyArray, idColumn, refColumn, shopColumn, textArray, time, words } from '../db/columns';
 import { member, shop } from '../people/tables';
 import { photo } from '../photos/tables';
 import { tag } from '../tags/tables';
+
+export * from './tables/label-reading';
+export * from './tables/triage';
 
 export const donor = pgTable(
 	'donor',
@@ -29,6 +34,7 @@ export const donor = pgTable(
 		typeCode: text('type_code').notNull().default(''),
 		dateCode: text('date_code').notNull().default(''),
 		serial: text('serial').notNull().default(''),
+		emissionFamily: text('emission_family').notNull().default(''),
 		displacementCc: doublePrecision('displacement_cc'),
 		shaft: text('shaft', { enum: SHAFTS }),
 		engineClass: text('engine_class'),
@@ -45,6 +51,10 @@ export const donor = pgTable(
 		paidCents: integer('paid_cents').notNull().default(0),
 		note: text('note').notNull().default(''),
 		state: text('state', { enum: DONOR_STATES }).notNull(),
+		/** The owner passed the release that stands with a reason; a newer release is asked again. */
+		gateOverruled: boolean('gate_overruled').notNull().default(false),
+		/** A parked one is looked at again by this day. */
+		reviewOn: date('review_on', { mode: 'string' }),
 		takenInAt: time('taken_in_at').notNull(),
 		strippedAt: time('stripped_at'),
 		version: integer('version').notNull().default(1)
@@ -70,9 +80,23 @@ export const release = pgTable(
 	{
 		shopId: shopColumn().references(() => shop.id),
 		id: idColumn(),
+		/** Consecutive in the shop's register. */
+		number: integer('number').notNull().default(0),
 		donorId: refColumn('donor_id').notNull(),
 		route: text('route', { enum: RELEASE_ROUTES }).notNull(),
 		document: text('document').notNull().default(''),
+		/** What the donor was taken for on that day; a later correction of the donor leaves the book as it is. */
+		engine: text('engine').notNull().default(''),
+		serial: text('serial').notNull().default(''),
+		fromName: text('from_name').notNull().default(''),
+		fromAddress: text('from_address').notNull().default(''),
+		/** What showed who they are, never its number in full. */
+		idSeen: text('id_seen').notNull().default(''),
+		/** What was signed, word for word, and the picture of the signature or of the signed paper. */
+		signedWords: text('signed_words').notNull().default(''),
+		photoId: refColumn('photo_id'),
+		/** Why a newer entry was needed. */
+		because: text('because').notNull().default(''),
 		on: date('on', { mode: 'string' }).notNull(),
 		holdUntil: date('hold_until', { mode: 'string' }),
 		memberId: refColumn('member_id').notNull(),
@@ -81,6 +105,10 @@ export const release = pgTable(
 	(t) => [
 		primaryKey({ columns: [t.shopId, t.id] }),
 		index('release_donor').on(t.shopId, t.donorId),
+		uniqueIndex('release_number')
+			.on(t.shopId, t.number)
+			.where(sql`number > 0`),
+		foreignKey({ columns: [t.shopId, t.photoId], foreignColumns: [photo.shopId, photo.id] }),
 		foreignKey({ columns: [t.shopId, t.donorId], foreignColumns: [donor.shopId, donor.id] }),
 		foreignKey({ columns: [t.shopId, t.memberId], foreignColumns: [member.shopId, member.id] }),
 		check('release_route', sql`${t.route} in (${words(RELEASE_ROUTES)})`)

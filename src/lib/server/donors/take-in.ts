@@ -7,6 +7,7 @@ import type { Tx } from '../db';
 import { allow, record } from '../people';
 import { shop } from '../people/tables';
 import type { KeptPhoto } from '../photos';
+import { announceDonor } from './announce';
 import { addBoxRow } from './boxes';
 import { donorColumns } from './columns';
 import { attachPhoto } from './photos';
@@ -30,7 +31,7 @@ async function nextNumber(tx: Tx, ctx: Context): Promise<number> {
 	return row!.number;
 }
 
-async function addRow(tx: Tx, ctx: Context, input: Omit<TakeIn, 'release'>) {
+async function addRow(tx: Tx, ctx: Context, input: Omit<TakeIn, 'release' | 'tag'>) {
 	const [row] = await tx
 		.insert(donor)
 		.values({
@@ -53,9 +54,9 @@ export const takeIn = (ctx: Context, input: TakeIn, plates: KeptPhoto[] = []): P
 		allow(ctx, 'work');
 		if (!input.model && plates.length === 0)
 			throw new Refused('bad input', 'Enter the model, or add a photo of the plate.', 'model');
-		const { release, ...known }: TakeIn & { release?: ReleaseInput } = input;
+		const { release, tag: blank, ...known }: TakeIn & { release?: ReleaseInput } = input;
 		const row = await addRow(tx, ctx, known);
-		const { tag } = await addBoxRow(tx, ctx, row.id);
+		const { tag } = await addBoxRow(tx, ctx, row.id, blank);
 		await record(tx, ctx, {
 			about: 'donor',
 			aboutId: row.id,
@@ -63,6 +64,7 @@ export const takeIn = (ctx: Context, input: TakeIn, plates: KeptPhoto[] = []): P
 			toState: 'whole',
 			detail: { engine: sayEngine(row), tag }
 		});
+		await announceDonor(tx, ctx, row.id, true);
 		for (const plate of plates) await attachPhoto(tx, ctx, row.id, plate, 'label');
 		if (release) await addRelease(tx, ctx, row, release);
 		return { id: row.id, number: sayNumber(row.number), tag, version: row.version };

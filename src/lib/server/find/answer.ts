@@ -1,8 +1,15 @@
 import type { PartState, Grade, ProofWay } from '$lib/parts/words';
 import type { Sureness } from '$lib/donors/words';
 
-/** A part as the database's own search gives it. */
-export interface FoundPart {
+/** A part as the database's own search gives it, and how it came to answer. */
+export interface Hit {
+	/** Where it stands in the order of answers, as a cursor says it. */
+	at: string;
+	/** How near it comes: 0 a tag, 1 a number, 2 what replaced it, 7 to the letter, 15 known not to fit. */
+	tier: number;
+	fits: boolean | null;
+	same: string;
+	count: number;
 	id: number;
 	tag: string;
 	kind: string;
@@ -10,47 +17,32 @@ export interface FoundPart {
 	grade: Grade;
 	state: PartState;
 	bin: string | null;
-	box: number | null;
 	donor: number | null;
 	maker: string | null;
 	model: string | null;
 	engine: string;
 	engineKey: string;
 	serial: string | null;
-	typeCode: string | null;
 	cc: number | null;
 	cause: string | null;
 	secondCause: string | null;
 	sureness: Sureness | null;
-	takenInAt: string | null;
 	numbers: string[];
 	note: string;
+	/** What is missing from its set. */
+	missing?: string;
 	mass: number | null;
 	heldFor: string | null;
 	heldUntil: string | null;
 	outAs: 'fitted' | 'sold' | null;
 	outTo: string | null;
 	changedAt: string;
-	pulledAt: string;
-	binCost: number | null;
-	binLitres: number | null;
-	asked: number | null;
+	newCents: number | null;
+	copyCents: number | null;
 	photo: number | null;
 	proofs: { how: ProofWay; passed: boolean }[] | null;
-	price: { newCents: number; copyCents: number | null; source: string; seenOn: string } | null;
-	/** How many others would answer the same call, and how many of them go first. */
-	queue: [number, number];
-	stands: boolean;
-}
-
-export interface Hit {
-	at: [string, string];
-	/** How near it comes: 0 a tag, 1 a number, 2 what replaced it, 7 to the letter, 15 known not to fit. */
-	tier: number;
-	fits: boolean | null;
-	same: string;
-	count: number;
-	part: FoundPart;
+	/** How many that would answer the same call go first. */
+	before: number;
 }
 
 interface Counted {

@@ -1,8 +1,7 @@
 import type { FindQuery } from '$lib/find/input';
 import type { Plan } from '$lib/find/plan';
 import { dayIn } from '$lib/donors/day';
-import type { Context } from '../context';
-import type { Tx } from '../db';
+import { inShop, type Context } from '../context';
 import type { Answer } from './answer';
 import { asked } from './tables';
 
@@ -21,7 +20,6 @@ const isNarrowed = ({
 
 /** A search for one kind that ends in nothing counts as a call: one for each person, kind and day. */
 export async function countAsked(
-	tx: Tx,
 	ctx: Context,
 	plan: Plan,
 	query: FindQuery,
@@ -31,16 +29,14 @@ export async function countAsked(
 	const inVain = total === 0 || level === 3;
 	if (!inVain || !kind || plan.kinds.length > 1 || plan.donorNumber !== null || isNarrowed(query))
 		return;
-	await tx
-		.insert(asked)
-		.values({
-			shopId: ctx.shopId,
-			memberId: ctx.memberId,
-			kind,
-			on: dayIn(timeZone, ctx.now),
-			engine: plan.engine.join(' '),
-			words: plan.text,
-			at: ctx.now
-		})
-		.onConflictDoNothing();
+	const row = {
+		shopId: ctx.shopId,
+		memberId: ctx.memberId,
+		kind,
+		on: dayIn(timeZone, ctx.now),
+		engine: plan.engine.join(' '),
+		words: plan.text,
+		at: ctx.now
+	};
+	await inShop(ctx, (tx) => tx.insert(asked).values(row).onConflictDoNothing());
 }

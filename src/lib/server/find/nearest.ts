@@ -1,10 +1,7 @@
 import type { Plan } from '$lib/find/plan';
 import type { NearKind } from '$lib/find/view';
-import { findKind } from '$lib/trade';
-import { and, count, eq, inArray } from 'drizzle-orm';
-import type { Context } from '../context';
-import type { Tx } from '../db';
-import { part } from '../parts/tables';
+import { findKind, kinds } from '$lib/trade';
+import { readInShop, type Context } from '../context';
 
 const MOST = 6;
 
@@ -19,22 +16,29 @@ function distance(id: string, asked: readonly string[], near: readonly string[])
 	return others.some((other) => other?.system === here?.system) ? 3 : 4;
 }
 
+/** The kinds, those that come nearest first, among equals those that are asked for most. */
+function nearestFirst(asked: readonly string[], near: readonly string[]): string[] {
+	const far = new Map(kinds.map(({ id }) => [id, distance(id, asked, near)]));
+	return [...kinds]
+		.sort((a, b) => far.get(a.id)! - far.get(b.id)! || b.callsPerYear - a.callsPerYear)
+		.map(({ id }) => id);
+}
+
 /** The kinds that are on the shelf and come nearest to what was asked, so that no answer is empty. */
 export async function nearestKinds(
-	tx: Tx,
 	ctx: Context,
 	plan: Plan,
 	kind: string | undefined
 ): Promise<NearKind[]> {
 	const asked = kind ? [kind] : plan.kinds;
-	const rows = await tx
-		.select({ kind: part.kind, count: count() })
-		.from(part)
-		.where(and(eq(part.shopId, ctx.shopId), inArray(part.state, ['shelved', 'pulled'])))
-		.groupBy(part.kind);
-	return rows
-		.map((row) => ({ ...row, far: distance(row.kind, asked, plan.nearKinds) }))
-		.sort((a, b) => a.far - b.far || b.count - a.count || a.kind.localeCompare(b.kind))
-		.slice(0, MOST)
-		.map(({ kind, count }) => ({ kind, kindName: findKind(kind)?.name ?? kind, count }));
+	const { near } = await readInShop<{ near: { kind: string; count: number }[] | null }>(
+		ctx,
+		'find near kinds',
+		'find_kinds($2::text[], $3::int) as near',
+		[nearestFirst(asked, plan.nearKinds), MOST]
+	);
+	return (near ?? []).map((row) => ({
+		...row,
+		kindName: findKind(row.kind)?.name ?? row.kind
+	}));
 }

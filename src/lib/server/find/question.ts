@@ -1,4 +1,4 @@
-import { readTag } from '$lib/codes';
+import { readTag, TAG_LENGTH } from '$lib/codes';
 import { engineKey } from '$lib/codes/number';
 import { donorNumber } from '$lib/donors/reference';
 import { gradeNo, priceRange, proofRange, saidFilters, standsNo } from '$lib/find/filters';
@@ -78,6 +78,7 @@ export function questionOf(
 		run: doubtful?.run,
 		tags: tag ? [tag] : [],
 		near_tags: nearTags,
+		slips: numberKey?.length === TAG_LENGTH && nearTags.length > 0,
 		address: text && text.length <= 40 ? text.toUpperCase() : undefined,
 		place: bin,
 		...donor(plan, query),

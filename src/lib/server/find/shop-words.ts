@@ -29,5 +29,6 @@ export async function wordsOfShop(tx: Tx, ctx: Context): Promise<Lexicon> {
 	return before.list;
 }
 
-/** The words of the shop as they were last read; none before the first time. */
-export const wordsRead = (ctx: Context): Lexicon => kept.get(ctx.shopId)?.list ?? NO_WORDS;
+/** The words of the shop as they were last read, and which was the last; none before the first time. */
+export const wordsRead = (ctx: Context): { list: Lexicon; last: number } =>
+	kept.get(ctx.shopId) ?? { list: NO_WORDS, last: 0 };

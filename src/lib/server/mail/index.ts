@@ -7,6 +7,10 @@ export interface Letter {
 	text: string;
 	/** Makes the Message-ID, so that a job tried twice is one letter. */
 	key?: string;
+	/** Where an answer goes. */
+	replyTo?: string;
+	/** Where such letters are stopped, by one tap of the reader's mail program. */
+	unsubscribe?: string;
 }
 
 /** Somebody waits for the answer while a sign-in letter leaves. */
@@ -14,14 +18,20 @@ const PATIENCE = { connectionTimeout: 5000, greetingTimeout: 5000, socketTimeout
 
 let post: Transporter | undefined;
 
+const oneTap = (link: string) => ({
+	'List-Unsubscribe': `<${link}>`,
+	'List-Unsubscribe-Post': 'List-Unsubscribe=One-Click'
+});
+
 /** Sends one plain-text letter over SMTP; throws when the server does not take it. */
 export async function sendLetter(letter: Letter): Promise<void> {
 	post ??= nodemailer.createTransport({ url: env().SMTP_URL, ...PATIENCE });
-	const { key, ...rest } = letter;
+	const { key, unsubscribe, ...rest } = letter;
 	const host = new URL(env().ORIGIN).hostname;
 	await post.sendMail({
 		from: env().MAIL_FROM,
 		...rest,
-		...(key ? { messageId: `<${key}@${host}>` } : {})
+		...(key ? { messageId: `<${key}@${host}>` } : {}),
+		...(unsubscribe ? { headers: oneTap(unsubscribe) } : {})
 	});
 }

@@ -15,6 +15,7 @@ export const proofsOf = (tx: Tx, ctx: Context, partId: number): Promise<ProofVie
 			how: proof.how,
 			figure: proof.figure,
 			unit: proof.unit,
+			figures: proof.figures,
 			note: proof.note,
 			passed: proof.passed,
 			by: member.name,
@@ -52,12 +53,12 @@ export async function photosOf(
 	alt: string
 ): Promise<PartView['photos']> {
 	const rows = await tx
-		.select({ id: photo.id })
+		.select({ id: photo.id, blur: photo.blur })
 		.from(partPhoto)
 		.innerJoin(photo, and(eq(photo.shopId, partPhoto.shopId), eq(photo.id, partPhoto.photoId)))
 		.where(
 			and(eq(partPhoto.shopId, ctx.shopId), eq(partPhoto.partId, partId), isNull(photo.deletedAt))
 		)
 		.orderBy(asc(photo.id));
-	return rows.map(({ id }) => ({ id, links: photoLinks(slug, id), alt }));
+	return rows.map(({ id, blur }) => ({ id, blur, links: photoLinks(slug, id), alt }));
 }

@@ -1,11 +1,16 @@
+import { kinds } from '$lib/trade';
 import { sql } from 'drizzle-orm';
 import type { Context } from '../context';
 import type { Tx } from '../db';
 import { event } from '../people/tables';
+import { part } from './tables';
+
+/** Kinds for which a look is the test. */
+const LOOKED_OVER = kinds.filter(({ reuse }) => reuse === 'look-over').map(({ id }) => id);
 
 /**
  * Did it fail, come back or go to the red bin, and has no test been passed since?
- * Read from its events; what was undone does not count.
+ * Read from its events; what was undone does not count, nor does a look where the kind asks for a test.
  */
 export async function isDoubtful(tx: Tx, ctx: Context, partId: number): Promise<boolean> {
 	const { rows } = await tx.execute<{ passed: boolean }>(sql`
@@ -15,6 +20,9 @@ export async function isDoubtful(tx: Tx, ctx: Context, partId: number): Promise<
 			and (e.what = 'prove'
 				or (e.what in ('pull', 'move', 'take back')
 					and e.to_state = 'back' and e.from_state is distinct from 'back'))
+			and not (e.what = 'prove' and (e.detail->>'passed')::boolean and e.detail->>'how' = 'look-over'
+				and exists (select from ${part} p where p.shop_id = e.shop_id and p.id = e.about_id
+					and p.kind <> all(${sql.param(LOOKED_OVER)}::text[])))
 			and not exists (
 				select from ${event} u
 				where u.shop_id = e.shop_id and u.about = 'part' and u.about_id = e.about_id

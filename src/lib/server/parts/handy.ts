@@ -1,7 +1,8 @@
+import { whereTo, type Suggestion } from '$lib/bins/where-to';
 import type { KindTile } from '$lib/parts/logging';
 import { kind, kinds } from '$lib/trade';
-import { and, desc, eq, isNotNull, isNull, sql } from 'drizzle-orm';
-import { bin } from '../bins/tables';
+import { desc, eq, sql } from 'drizzle-orm';
+import { shelves } from '../bins';
 import { inShop, type Context } from '../context';
 import { event } from '../people/tables';
 import { part } from './tables';
@@ -17,36 +18,13 @@ export const recentFor = (ctx: Context): Promise<string[]> =>
 		return rows.map((row) => row.said);
 	});
 
-export interface HandyBin {
-	address: string;
-	purpose: string;
-	parts: number;
-}
-
-/** The bins where parts of this kind lie, fullest first. */
-export const binsFor = (ctx: Context, kindId: string): Promise<HandyBin[]> =>
-	inShop(ctx, async (tx) =>
-		tx
-			.select({
-				address: bin.address,
-				purpose: bin.purpose,
-				parts: sql<number>`count(*)::int`
-			})
-			.from(part)
-			.innerJoin(bin, and(eq(bin.shopId, part.shopId), eq(bin.id, part.binId)))
-			.where(
-				and(
-					eq(part.shopId, ctx.shopId),
-					eq(part.kind, kindId),
-					isNotNull(part.binId),
-					isNull(bin.retiredAt),
-					eq(bin.red, false)
-				)
-			)
-			.groupBy(bin.id, bin.address, bin.purpose)
-			.orderBy(desc(sql`count(*)`), bin.address)
-			.limit(4)
-	);
+/** The best places for a part of this kind, each with why: its own kind first, never full, too high or beside what harms it. */
+export const binsFor = (
+	ctx: Context,
+	kindId: string,
+	grams: number | null = null
+): Promise<Suggestion[]> =>
+	inShop(ctx, async (tx, ctx) => whereTo({ kind: kindId, grams }, await shelves(tx, ctx), 4));
 
 /** The kinds that the shop logs most, filled up with those that are called for most. */
 export const usualKinds = (ctx: Context): Promise<KindTile[]> =>

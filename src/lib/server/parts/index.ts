@@ -1,6 +1,8 @@
 // Parts: logged, moved, proved, held, sold, taken back and scrapped; the verdict on each; what a donor still carries.
 // Every verb locks the part, asks the rules of $lib/parts and writes the event of what it did.
 // Not for: looking for parts (find), what they cost new (prices), taking a donor in or apart (donors).
+export { benchFor } from './bench';
+export { cleaningFor, cleanPart } from './clean';
 export { editPart } from './edit';
 export { workOut } from './calculator';
 export { chanceOn } from './chance-on';
@@ -11,21 +13,34 @@ export { gradePart } from './grade';
 export { binsFor, recentFor, usualKinds } from './handy';
 export { freePart, holdPart } from './hold';
 export { partsByIds } from './items';
+export { leaveKindOn, takeKindUp } from './left-on';
 export { foundPart, missPart } from './missing';
 export { movePart } from './move';
 export { logOldStock } from './old-stock';
 export { fitPart, sellPart } from './out';
 export { firstPhotos } from './first-photos';
 export { addPartPhoto, hangPhoto } from './photo';
+export { photographAny } from './photo-of';
+export { putBackPartPhoto, removedPartPhotos, removePartPhoto } from './photos-away';
+export { getPinnedPhoto, listPins } from './pinned-photo';
+export { changePin, placePin, removePin } from './pins';
+export { listPinsOfPart } from './pins-of-part';
 export { planFor } from './plan';
 export { provePart } from './prove';
+export { putAway, undoParts } from './put-away';
 export { pullPart } from './pull';
+export { pullSeen } from './pull-seen';
+export { noteMeasure, setRuler } from './rulers';
 export { countDonorParts, listDonorParts } from './off-donor';
 export { getPart } from './queries';
 export { recentFigures } from './recent-figures';
+export { rehomePart } from './rehome';
 export { scrapPart } from './scrap';
 export { kindsStillOn } from './still-on';
 export { takeBackPart } from './take-back';
 export { whatItTaught } from './taught';
 export { undoPart } from './undo';
+export { waitedFor } from './waited-for';
+export { watchBench } from './watch-bench';
+export { undoChanges } from './undo-change';
 export { kindVerdicts, partVerdicts } from './verdicts';

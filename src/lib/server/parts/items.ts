@@ -34,7 +34,7 @@ export const placedParts = (tx: Tx, ctx: Context, ids: readonly number[]) =>
 export type PlacedPart = Awaited<ReturnType<typeof placedParts>>[number];
 
 export function itemOf(row: PlacedPart, verdict: Verdict | null, slug: string): PartItem {
-	const { id, tag, label, grade, state, heldFor } = row.part;
+	const { id, tag, label, grade, state, heldFor, setMissing } = row.part;
 	return {
 		id,
 		tag,
@@ -52,7 +52,8 @@ export function itemOf(row: PlacedPart, verdict: Verdict | null, slug: string): 
 		verdict: verdict?.verdict ?? null,
 		gainCents: verdict?.gainCents ?? null,
 		photo: row.photoId === null ? null : photoLinks(slug, Number(row.photoId)).thumb,
-		heldBy: heldFor
+		heldBy: heldFor,
+		setMissing
 	};
 }
 

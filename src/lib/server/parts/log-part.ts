@@ -1,3 +1,4 @@
+import { comesIn } from '$lib/parts/coming';
 import type { Pull } from '$lib/parts/input';
 import { unticked } from '$lib/parts/keeping';
 import type { PartState } from '$lib/parts/words';
@@ -7,9 +8,11 @@ import type { Context } from '../context';
 import type { Tx } from '../db';
 import { getPolicy } from '../people';
 import { mintTag } from '../tags';
+import { announcePart } from './announce';
 import { chanceBy } from './chance-on';
 import { insertPart, type Origin } from './insert-part';
 import { hangKept } from './photo';
+import { pinsFollow } from './pins-follow';
 import { placeNamed, redPlace, type Place } from './place';
 import { writeProof } from './prove';
 import { recordPart, type Done } from './row';
@@ -52,10 +55,11 @@ async function firstPlace(
 export async function logPart(tx: Tx, ctx: Context, input: Pull, origin: Origin): Promise<Logged> {
 	await askRules(ctx, input, origin.donor);
 	const { place, state } = await firstPlace(tx, ctx, input);
-	const tag = await mintTag(tx, ctx, 'part');
+	const tag = await mintTag(tx, ctx, 'part', input.tag);
 	const id = await insertPart(tx, ctx, { input, origin, place, state, tag });
-	if (input.proof) await writeProof(tx, ctx, id, input.proof);
+	if (input.proof) await writeProof(tx, ctx, { id, kind: input.kind }, input.proof);
 	for (const kept of origin.kept ?? []) await hangKept(tx, ctx, id, kept);
+	if (origin.donor) await pinsFollow(tx, ctx, { id, donorId: origin.donor.id, kind: input.kind });
 	const detail = {
 		kind: input.kind,
 		grade: input.grade ?? 'core',
@@ -64,5 +68,6 @@ export async function logPart(tx: Tx, ctx: Context, input: Pull, origin: Origin)
 		proof: input.proof
 	};
 	const eventId = await recordPart(tx, ctx, { id, state: null }, 'pull', state, detail);
+	if (comesIn(null, state)) await announcePart(tx, ctx, id, true);
 	return { id, tag, eventId, state, to: place?.said ?? null };
 }

@@ -10,6 +10,8 @@ import { donorRow } from '../donors';
 import { findParts } from '../find';
 import { editPolicy } from '../people';
 import { putPrice } from '../prices';
+import { WantInput } from '../../wants/input';
+import { addWant } from '../wants';
 import {
 	fitPart,
 	freePart,
@@ -116,8 +118,12 @@ describe('what the history of a shop says', () => {
 		await ask(ours, 'stator', '2024-03-14');
 		await ask(ours, 'stator', '2025-03-14');
 		const asked = async () => (await seen(ours.ctx)).asked;
-		expect(await asked()).toMatchObject([{ kind: 'stator', engineKey: '', calls: 2 }]);
+		expect(await asked()).toMatchObject([{ kind: 'stator', engineKey: '', sought: 2, wanted: 0 }]);
 		expect((await asked())[0]!.years).toBeCloseTo(2, 2);
+		const want = { kind: 'stator', engine: 'TARN-21L', job: 'Mower of Tamsin', tellBy: 'phone' };
+		await addWant(ours.at(NOW), WantInput.parse(want));
+		await addWant(theirs.ctx, WantInput.parse(want));
+		expect(await asked()).toMatchObject([{ kind: 'stator', sought: 2, wanted: 1 }]);
 		const { tags } = await coils(ours, 1, 'stator');
 		expect((await asked())[0]!.years).toBeCloseTo(0, 2);
 		await sellPart(ours.at(new Date('2025-03-14T12:00:00Z')), tags[0]!, { cents: 2000 });

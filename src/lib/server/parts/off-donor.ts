@@ -6,7 +6,8 @@ import type { Tx } from '../db';
 import { partsByIds } from './items';
 import { part } from './tables';
 
-const offDonor = (ctx: Context, donorId: number) =>
+/** The parts that came off a donor; what was logged by mistake does not count. */
+export const offDonor = (ctx: Context, donorId: number) =>
 	and(
 		eq(part.shopId, ctx.shopId),
 		eq(part.donorId, donorId),

@@ -4,6 +4,7 @@ import type { EngineClass } from '$lib/trade';
 import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
 import { donorRow, type DonorRow } from '../donors';
+import { kindsLeftOn, withoutLeftOn } from './left-on';
 import { kindsThere } from './still-on';
 import { kindSubjects } from './verdicts';
 
@@ -12,7 +13,9 @@ export async function toPlan(tx: Tx, ctx: Context, donor: DonorRow) {
 	const ids = (await kindsThere(tx, ctx, donor)).map(({ id }) => id);
 	const { subjects, ...shop } = await kindSubjects(ctx, donor.id, ids);
 	const engineClass = donor.engineClass as EngineClass;
-	return { ...shop, engineClass, subjects: plannable([...subjects.values()], engineClass) };
+	const left = (await kindsLeftOn(tx, ctx, donor.id)).map((one) => one.kind);
+	const counted = withoutLeftOn([...subjects.values()], left);
+	return { ...shop, engineClass, subjects: plannable(counted, engineClass) };
 }
 
 /** What to take off a donor in the minutes at hand (null: no limit), as it stands now. */

@@ -1,3 +1,4 @@
+import { ageClock } from '$lib/bins/age';
 import { sayNumber } from '$lib/donors/reference';
 import type { PartView } from '$lib/parts/view';
 import type { Verdict } from '$lib/parts/verdict-view';
@@ -31,7 +32,6 @@ function viewOf(ctx: Context, placed: PlacedPart, worth: Verdict | null, slug: s
 		system: kind(row.kind).system,
 		numbers: row.numbers,
 		set: row.set,
-		setMissing: row.setMissing,
 		checklist: row.checklist,
 		massGrams: row.massGrams,
 		note: row.note,
@@ -49,6 +49,12 @@ function viewOf(ctx: Context, placed: PlacedPart, worth: Verdict | null, slug: s
 	};
 }
 
+/** Its age clock; a passed test puts off the next look. */
+function ageOf(ctx: Context, row: { kind: string; pulledAt: Date }, proofs: PartView['proofs']) {
+	const tested = proofs.findLast((one) => one.passed)?.at ?? null;
+	return ageClock(row.kind, row.pulledAt, tested, ctx.now);
+}
+
 /** One part with everything that is known of it. */
 export const getPart = (ctx: Context, tag: string): Promise<PartView> =>
 	inShop(ctx, async (tx, ctx) => {
@@ -57,11 +63,13 @@ export const getPart = (ctx: Context, tag: string): Promise<PartView> =>
 		const [placed] = await placedParts(tx, ctx, [row.id]);
 		const worth = (await partVerdicts(ctx, [row.id])).get(row.id) ?? null;
 		const like = await nextLike(tx, ctx, row);
+		const proofs = await proofsOf(tx, ctx, row.id);
 		const gone = ['held', 'out', 'missing', 'scrapped'].includes(row.state);
 		return {
 			...viewOf(ctx, placed!, worth, slug),
 			doubtful: await isDoubtful(tx, ctx, row.id),
-			proofs: await proofsOf(tx, ctx, row.id),
+			proofs,
+			age: ageOf(ctx, row, proofs),
 			photos: await photosOf(tx, ctx, row.id, slug, kind(row.kind).name),
 			history: await historyOf(tx, ctx, row.id),
 			next: like ? ((await partsByIds(ctx, [like.id]))[0] ?? null) : null,

@@ -14,7 +14,7 @@ interface Kept {
 	readAt: number;
 	reading: boolean;
 	/** What was last made of it, and by which policy. */
-	figures?: { policy: string; made: ShopFigures };
+	figures?: { policy: Policy; text: string; made: ShopFigures };
 }
 
 /** What was counted of each shop; each process counts anew, so nothing rests on it. */
@@ -47,10 +47,10 @@ function readBeside({ tx: _, ...ctx }: Context, old: Kept): void {
 }
 
 function figuresOf(found: Kept, policy: Policy): ShopFigures {
+	if (found.figures?.policy === policy) return found.figures.made;
 	const text = JSON.stringify(policy);
-	if (found.figures?.policy === text) return found.figures.made;
-	const made = withHistory(policy, found.seen);
-	found.figures = { policy: text, made };
+	const made = found.figures?.text === text ? found.figures.made : withHistory(policy, found.seen);
+	found.figures = { policy, text, made };
 	return made;
 }
 

@@ -1,4 +1,5 @@
 import { readTag } from '$lib/codes';
+import { comesIn } from '$lib/parts/coming';
 import { searchWords } from '$lib/parts/search-words';
 import { isMove, leads, NEEDS, whyNot, type Move, type PartFacts } from '$lib/parts/state';
 import type { PartState } from '$lib/parts/words';
@@ -6,10 +7,14 @@ import { NotFound, Refused } from '$lib/refusal';
 import { and, eq } from 'drizzle-orm';
 import type { Context } from '../context';
 import type { Tx } from '../db';
+import { notToLeave } from '../donors';
 import { allow, record } from '../people';
+import { announcePart } from './announce';
 import { isDoubtful } from './doubt';
 import { part } from './tables';
 import { takenWords } from './taken';
+
+const LEAVING: readonly Move[] = ['sell', 'fit', 'scrap'];
 
 export type PartRow = typeof part.$inferSelect;
 
@@ -48,8 +53,16 @@ export async function partFor(tx: Tx, ctx: Context, tag: string, move: Move): Pr
 	allow(ctx, NEEDS[move]);
 	const row = await partRow(tx, ctx, tag, 'lock');
 	const no = whyNot(move, await factsOf(tx, ctx, row));
-	if (!no) return row;
+	if (!no) return released(tx, ctx, row, move);
 	throw new Refused(no.code, no.code === 'taken' ? await takenWords(tx, ctx, row) : no.said);
+}
+
+/** What leaves the shop needs the release of its donor to stand, and its hold date to be past. */
+async function released(tx: Tx, ctx: Context, row: PartRow, move: Move): Promise<PartRow> {
+	if (row.donorId === null || !LEAVING.includes(move)) return row;
+	const said = await notToLeave(tx, ctx, row.donorId);
+	if (said) throw new Refused('gate', said);
+	return row;
 }
 
 const WORDED = ['label', 'numbers', 'note', 'engine', 'set'] as const;
@@ -84,6 +97,8 @@ export async function changePart(
 		Object.keys(set).map((key) => [key, row[key as keyof PartRow]])
 	);
 	const eventId = await recordPart(tx, ctx, row, what, next.state, { ...detail, before });
+	const isNew = comesIn(row.state, next.state);
+	if (isNew || WORDED.some((key) => key in set)) await announcePart(tx, ctx, row.id, isNew);
 	return { tag: row.tag, eventId };
 }
 

@@ -46,6 +46,7 @@ export const kindsStillOn = (ctx: Context, donorRef: string): Promise<KindStillO
 				minutes: minutesToPull(id, ids),
 				verdict: verdict.verdict,
 				gainCents: verdict.gainCents,
+				waitingFor: verdict.waitingFor,
 				never
 			});
 		}

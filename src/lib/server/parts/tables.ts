@@ -1,4 +1,5 @@
 import { GRADES, PART_STATES, PROOFS } from '../../parts/words';
+import type { ProofFigure } from '../../parts/view';
 import { sql } from 'drizzle-orm';
 import {
 	boolean,
@@ -7,6 +8,7 @@ import {
 	foreignKey,
 	index,
 	integer,
+	jsonb,
 	pgTable,
 	primaryKey,
 	text,
@@ -18,6 +20,8 @@ import { box, donor } from '../donors/tables';
 import { member, shop } from '../people/tables';
 import { photo } from '../photos/tables';
 import { tag } from '../tags/tables';
+
+export * from './tables/left-on';
 
 /** One physical part. Without a donor it is old stock and says itself which engine it fits. */
 export const part = pgTable(
@@ -86,6 +90,8 @@ export const proof = pgTable(
 		how: text('how', { enum: PROOFS }).notNull(),
 		figure: doublePrecision('figure'),
 		unit: text('unit').notNull().default(''),
+		/** What else was read, each by the name of its field. */
+		figures: jsonb('figures').$type<ProofFigure[]>().notNull().default([]),
 		note: text('note').notNull().default(''),
 		passed: boolean('passed').notNull(),
 		memberId: refColumn('member_id').notNull(),
@@ -146,3 +152,5 @@ export const fit = pgTable(
 		check('fit_because', sql`${t.fits} or ${t.because} <> ''`)
 	]
 );
+
+export * from './tables/pins';

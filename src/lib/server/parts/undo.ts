@@ -7,6 +7,7 @@ import { inShop, type Context } from '../context';
 import type { Tx } from '../db';
 import { allow } from '../people';
 import { event } from '../people/tables';
+import { pinsGoBack } from './pins-follow';
 import { changePart, own, type Done, type PartRow } from './row';
 import { part } from './tables';
 
@@ -30,6 +31,7 @@ export const undoPart = (ctx: Context, eventId: number): Promise<Done> =>
 		if (isMove(newest.what)) allow(ctx, NEEDS[newest.what]);
 		if (ctx.now.getTime() - newest.at.getTime() > UNDO_DAYS * 24 * 3600 * 1000)
 			throw new Refused('gate', `This was more than ${UNDO_DAYS} days ago. Change it by hand.`);
+		if (newest.fromState === null) await pinsGoBack(tx, ctx, row.id);
 		const detail = { undone: newest.id, said: happened(newest) };
 		return changePart(tx, ctx, row, 'undo', before(newest), detail);
 	});

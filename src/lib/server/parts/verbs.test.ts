@@ -12,6 +12,7 @@ import {
 	freePart,
 	getPart,
 	gradePart,
+	hangPhoto,
 	holdPart,
 	missPart,
 	movePart,
@@ -235,6 +236,29 @@ describe('scrapping and going missing', () => {
 		await expect(holdPart(ours.ctx, tag, { for: 'x' })).rejects.toMatchObject({
 			message: expect.stringContaining('Destroyed by Wenna Oke on Mar 14, 2026: cracked.')
 		});
+	});
+
+	it('a safety part goes destroyed, with a picture of that taken now', async () => {
+		const wheel = {
+			kind: 'flywheel',
+			grade: 'untested',
+			checklist: checklist('flywheel')
+		} as const;
+		const { tag } = await pullPart(ours.ctx, donor, { ...wheel, checklist: [...wheel.checklist] });
+		const kept = () => ({
+			key: `1/${crypto.randomUUID()}`,
+			width: 1,
+			height: 1,
+			bytes: 1,
+			blur: ''
+		});
+		await hangPhoto(ours.at(days(-2)), tag, kept());
+		const scrap = (destroyed: boolean) => scrapPart(ours.ctx, tag, { reason: 'crack', destroyed });
+		await expect(scrap(false)).rejects.toMatchObject({ field: 'destroyed' });
+		await expect(scrap(true)).rejects.toMatchObject({ field: 'file' });
+		await hangPhoto(ours.ctx, tag, kept());
+		await scrap(true);
+		expect(await getPart(ours.ctx, tag)).toMatchObject({ state: 'scrapped', destroyed: true });
 	});
 
 	it('does not scrap what is out', async () => {

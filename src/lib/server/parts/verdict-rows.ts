@@ -1,9 +1,12 @@
+import { lexemesOf } from '$lib/donors/lexemes';
 import type { Queued } from '$lib/parts/place';
+import type { Wantable } from '$lib/parts/wanted';
 import { and, arrayOverlaps, asc, eq, inArray, or, sql } from 'drizzle-orm';
 import { bin } from '../bins/tables';
 import type { Context } from '../context';
 import type { Tx } from '../db';
 import { donor } from '../donors/tables';
+import { foundNumber } from '../find/tables';
 import { part, proof } from './tables';
 
 /** A part that came off a donor fits what the donor was; old stock says itself what it fits. */
@@ -15,6 +18,10 @@ const rows = {
 	grade: part.grade,
 	state: part.state,
 	engineKey: fitsEngine,
+	/** What a want for its engine or its measures is compared with. */
+	ownEngine: part.engine,
+	donorWords: donor.searchWords,
+	words: part.searchWords,
 	numberKeys: part.numberKeys,
 	pulledAt: part.pulledAt,
 	massGrams: part.massGrams,
@@ -38,6 +45,25 @@ export type VerdictRow = Awaited<ReturnType<typeof fromParts>>[number];
 export const rowsOf = (tx: Tx, ctx: Context, partIds: readonly number[]): Promise<VerdictRow[]> =>
 	fromParts(tx).where(and(eq(part.shopId, ctx.shopId), inArray(part.id, [...partIds])));
 
+/** Parts of these kinds off these engines, or whose engine only the donor knows: by the index, not the whole kind. */
+const byEngine = (tx: Tx, ctx: Context, kinds: string[], engines: string[]) =>
+	tx
+		.select({ id: part.id })
+		.from(part)
+		.where(
+			and(
+				eq(part.shopId, ctx.shopId),
+				inArray(part.kind, kinds),
+				inArray(part.engineKey, engines.length > 0 ? [...engines, ''] : [])
+			)
+		);
+
+const byNumber = (tx: Tx, ctx: Context, numbers: string[]) =>
+	tx
+		.select({ id: foundNumber.partId })
+		.from(foundNumber)
+		.where(and(eq(foundNumber.shopId, ctx.shopId), inArray(foundNumber.key, numbers)));
+
 /** What stands in the shop and may answer the same calls as these; the pure rule decides. */
 export async function queueFor(
 	tx: Tx,
@@ -48,9 +74,11 @@ export async function queueFor(
 	const engines = [...new Set(asked.map(({ engineKey }) => engineKey))].filter(Boolean);
 	const numbers = [...new Set(asked.flatMap(({ numberKeys }) => numberKeys))];
 	if (engines.length + numbers.length === 0) return [];
+	const near = byEngine(tx, ctx, kinds, engines).union(byNumber(tx, ctx, numbers));
 	return fromParts(tx).where(
 		and(
 			eq(part.shopId, ctx.shopId),
+			inArray(part.id, near),
 			inArray(part.kind, kinds),
 			inArray(part.state, ['pulled', 'shelved']),
 			or(
@@ -70,6 +98,13 @@ export const queued = (row: VerdictRow): Queued => ({
 	state: row.state,
 	inRedBin: row.red ?? false,
 	pulledAt: row.pulledAt.getTime()
+});
+
+/** A part as wants ask about it. */
+export const wantable = (row: VerdictRow): Queued & Wantable => ({
+	...queued(row),
+	engineWords: row.donorWords ?? lexemesOf(row.ownEngine),
+	words: row.words
 });
 
 /** The proofs of these parts, oldest first. */

@@ -10,8 +10,9 @@ import { donor } from '../donors/tables';
 import { getShop } from '../people';
 import { pricesFor } from '../prices';
 import { figuresFor } from './figures';
-import { proofsOf, queued, queueFor, rowsOf } from './verdict-rows';
+import { proofsOf, queued, queueFor, rowsOf, wantable } from './verdict-rows';
 import { priceOf, subjectOf } from './verdict-subject';
+import { openWants, waitingOf } from './waiting';
 
 export interface Shop {
 	/** With what the history taught. */
@@ -46,6 +47,7 @@ export const partVerdicts = (
 		const { policy, season } = await shopFigures(ctx, kinds);
 		const proofs = await proofsOf(tx, ctx, partIds);
 		const queue = (await queueFor(tx, ctx, rows)).map(queued);
+		const open = await openWants(tx, ctx, rows);
 		const prices = await pricesFor(
 			tx,
 			ctx,
@@ -55,6 +57,7 @@ export const partVerdicts = (
 			const price = priceOf(prices.get(String(row.id)), ctx, policy);
 			const subject: VerdictSubject = {
 				...subjectOf({ ...row, ...queued(row) }, queue, price, policy),
+				...waitingOf(wantable(row), open),
 				proofs: proofs.get(row.id) ?? [],
 				massGrams: row.massGrams,
 				bin: { yearlyCostCents: row.binCostCents, litres: row.binLitres },
@@ -80,9 +83,10 @@ export const kindSubjects = (
 			.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, donorId)));
 		if (!from) throw new NotFound();
 		const { policy, season } = await shopFigures(ctx, kindIds);
-		const { engineKey, cause, secondCause, sureness } = from;
+		const { engineKey, searchWords: engineWords, cause, secondCause, sureness } = from;
 		const asked = kindIds.map((kind) => ({ key: kind, kind, engineKey, numberKeys: [] }));
 		const queue = (await queueFor(tx, ctx, asked)).map(queued);
+		const open = await openWants(tx, ctx, asked);
 		const prices = await pricesFor(tx, ctx, asked);
 		const place = {
 			id: LAST,
@@ -95,8 +99,9 @@ export const kindSubjects = (
 			const price = priceOf(prices.get(one.key), ctx, policy);
 			const from = { ...one, ...place, cause, secondCause, sureness };
 			const subject = subjectOf(from, queue, price, policy);
+			const thing = { ...one, ...place, engineWords, words: '' };
 			// it is not off yet, so it does not count among those the shop has
-			return [one.kind, { ...subject, have: subject.have - 1 }];
+			return [one.kind, { ...subject, ...waitingOf(thing, open), have: subject.have - 1 }];
 		});
 		return { policy, season, subjects: new Map(subjects) };
 	});

@@ -101,4 +101,13 @@ function config(): SvelteKitAuthConfig {
 	};
 }
 
-export const { handle: authHandle, signIn, signOut } = SvelteKitAuth(async () => config());
+let made: { of: ReturnType<typeof db>; config: SvelteKitAuthConfig } | undefined;
+
+/** Made once for a database: it describes every table of its own, which takes longer than an answer may. */
+function keptConfig(): SvelteKitAuthConfig {
+	const of = db();
+	if (made?.of !== of) made = { of, config: config() };
+	return made.config;
+}
+
+export const { handle: authHandle, signIn, signOut } = SvelteKitAuth(async () => keptConfig());

@@ -5,6 +5,7 @@ export { allow } from './allow';
 export { authHandle, SignInFailed, signIn, signOut } from './auth';
 export { action, answerForm, contextFor, formKey, page } from './doorkeeper';
 export { change, changeKey, jsonFault, read } from './edge';
+export { newToken, tokenHash } from './hash';
 export { identify } from './identify';
 export { acceptInvite, findInvite } from './accept-invite';
 export { inviteMember, withdrawInvite } from './invites';

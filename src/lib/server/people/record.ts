@@ -3,7 +3,8 @@ import type { Tx } from '../db';
 import { event } from './tables';
 
 export interface Happening {
-	about: 'part' | 'donor' | 'bin' | 'price' | 'shop' | 'member' | 'photo';
+	about:
+		'part' | 'donor' | 'bin' | 'price' | 'shop' | 'member' | 'photo' | 'customer' | 'want' | 'walk';
 	aboutId: number;
 	what: string;
 	fromState?: string | null;

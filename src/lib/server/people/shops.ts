@@ -34,12 +34,16 @@ export async function shopsOf(db: Db, personId: string): Promise<Membership[]> {
 
 /** The shop and role that a script's key carries, or null. */
 export async function keyHolder(db: Db, key: string): Promise<Omit<Membership, 'name'> | null> {
-	const { rows } = await db.execute<{
+	const { rows } = await db.$client.query<{
 		shop_id: string;
 		slug: string;
 		member_id: string;
 		role: Role;
-	}>(sql`select * from key_holder(${tokenHash(key)})`);
+	}>({
+		name: 'key holder',
+		text: 'select * from key_holder($1)',
+		values: [tokenHash(key)]
+	});
 	const row = rows[0];
 	return row
 		? {

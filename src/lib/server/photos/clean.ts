@@ -1,12 +1,15 @@
-import { PHOTO_BYTES, PHOTO_PIXELS, PHOTO_SAID } from '$lib/photos/limits';
+import { HEIC_PIXELS, PHOTO_BYTES, PHOTO_PIXELS, PHOTO_SAID } from '$lib/photos/limits';
 import type { PhotoSize } from '$lib/photos/links';
 import { Refused } from '$lib/refusal';
-import sharp, { type Metadata } from 'sharp';
+import sharp, { type Metadata, type Sharp } from 'sharp';
+import { decodeHeic } from './heic';
 import { turns } from './turns';
 
 export interface CleanPhoto {
 	width: number;
 	height: number;
+	/** A dozen points of it in base64, for the place where it will stand. */
+	blur: string;
 	sizes: Record<PhotoSize, Buffer>;
 }
 
@@ -46,12 +49,22 @@ async function look(bytes: Buffer): Promise<Metadata> {
 	}
 }
 
-async function check(bytes: Buffer): Promise<void> {
+/** Whether the upload is a photo that can be kept, and if so whether it is a HEIC. */
+async function check(bytes: Buffer): Promise<{ heic: boolean }> {
 	if (bytes.length > PHOTO_BYTES) refuse('size');
-	const { format, compression } = await look(bytes);
-	if (format === 'heif') {
-		if (compression !== 'av1') refuse('heic');
-	} else if (!['jpeg', 'png', 'webp'].includes(format)) refuse('kind');
+	const { format, compression, width, height } = await look(bytes);
+	const heic = format === 'heif' && compression !== 'av1';
+	if (heic && width * height > HEIC_PIXELS) refuse('heic');
+	if (!['jpeg', 'png', 'webp', 'heif'].includes(format)) refuse('kind');
+	return { heic };
+}
+
+/** The upload on its way to becoming sizes: upright. */
+async function opened(bytes: Buffer): Promise<Sharp> {
+	const { heic } = await check(bytes);
+	if (!heic) return open(bytes).autoOrient();
+	const { data, width, height } = await decodeHeic(bytes);
+	return sharp(data, { raw: { width, height, channels: 4 } }).removeAlpha();
 }
 
 async function thumbOf(card: Buffer): Promise<Buffer> {
@@ -66,34 +79,44 @@ async function thumbOf(card: Buffer): Promise<Buffer> {
 	return thumb;
 }
 
+const blurOf = (thumb: Buffer): Promise<Buffer> =>
+	sharp(thumb).resize(16, 16, { fit: 'inside' }).webp({ quality: 25, alphaQuality: 0 }).toBuffer();
+
 /**
  * One decode of the upload; upright, in plain colours, without a byte of what the camera wrote beside the
  * picture. The smaller sizes come from the larger, so that no raw picture waits in memory.
  */
-async function draw(bytes: Buffer): Promise<CleanPhoto> {
-	const { data: full, info } = await open(bytes)
-		.autoOrient()
+async function draw(picture: Sharp, made: Made): Promise<CleanPhoto> {
+	const { data: full, info } = await picture
 		.resize(FULL, FULL, { fit: 'inside', withoutEnlargement: true })
-		.webp({ quality: 80 })
+		.webp({ quality: 80, effort: 2 })
 		.toBuffer({ resolveWithObject: true });
+	made('full', full);
 	const card = await sharp(full)
 		.resize(CARD, CARD, { fit: 'inside', withoutEnlargement: true })
 		.webp({ quality: 75 })
 		.toBuffer();
+	made('card', card);
+	const thumb = await thumbOf(card);
+	made('thumb', thumb);
 	return {
 		width: info.width,
 		height: info.height,
-		sizes: { full, card, thumb: await thumbOf(card) }
+		blur: (await blurOf(thumb)).toString('base64'),
+		sizes: { full, card, thumb }
 	};
 }
 
+/** Hears of each size as soon as it is there. */
+type Made = (size: PhotoSize, bytes: Buffer) => void;
+
 /** Makes the sizes that screens need out of an upload, or refuses it in words. */
-export const cleanPhoto = (bytes: Buffer): Promise<CleanPhoto> =>
+export const cleanPhoto = (bytes: Buffer, made: Made = () => {}): Promise<CleanPhoto> =>
 	turn(async () => {
-		await check(bytes);
 		try {
-			return await draw(bytes);
+			return await draw(await opened(bytes), made);
 		} catch (fault) {
+			if (fault instanceof Refused) throw fault;
 			return refuse(tooManyPixels(fault) ? 'pixels' : 'broken');
 		}
 	});

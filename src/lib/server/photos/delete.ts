@@ -1,7 +1,8 @@
 import { NotFound } from '$lib/refusal';
-import { and, eq, isNotNull, isNull } from 'drizzle-orm';
+import { and, eq, gte, isNull } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import { allow, record } from '../people';
+import { keptSince } from './keep';
 import { photo } from './tables';
 
 const setDeleted = (ctx: Context, id: number, deleted: boolean): Promise<void> =>
@@ -14,7 +15,7 @@ const setDeleted = (ctx: Context, id: number, deleted: boolean): Promise<void> =
 				and(
 					eq(photo.shopId, ctx.shopId),
 					eq(photo.id, id),
-					deleted ? isNull(photo.deletedAt) : isNotNull(photo.deletedAt)
+					deleted ? isNull(photo.deletedAt) : gte(photo.deletedAt, keptSince(ctx.now))
 				)
 			)
 			.returning({ id: photo.id });

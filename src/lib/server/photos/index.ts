@@ -5,4 +5,6 @@ export { cleanPhoto } from './clean';
 export { deletePhoto, restorePhoto } from './delete';
 export { addPhotoRow, keepPhoto, savePhoto, type KeptPhoto } from './keep';
 export { readPhoto } from './queries';
+export { removedAmong } from './removed';
 export { actionWithPhotos, changeWithPhoto } from './upload';
+export { readText } from './read-text';

@@ -1,4 +1,4 @@
-import { PHOTO_SIZES } from '$lib/photos/links';
+import { PHOTO_SIZES, type PhotoSize } from '$lib/photos/links';
 import { randomUUID } from 'node:crypto';
 import { inShop, type Context } from '../context';
 import { allow } from '../people';
@@ -12,22 +12,34 @@ export interface KeptPhoto {
 	width: number;
 	height: number;
 	bytes: number;
+	blur: string;
 }
 
 /** The keys of a shop stand under its number, so that the sweep can ask each shop for its own. */
 export const shopPrefix = (shopId: number) => `${shopId}/`;
 
+/** A photo that was taken away can be put back for so long. */
+const KEPT_DAYS = 30;
+
+/** Photos that were taken away since then can be put back. */
+export const keptSince = (now: Date) => new Date(now.getTime() - KEPT_DAYS * 86_400_000);
+
 /** Cleans the upload and puts its sizes into the store: before any transaction, the row comes after. */
 export async function keepPhoto(ctx: Context, upload: Buffer): Promise<KeptPhoto> {
 	allow(ctx, 'work');
 	if (ctx.tx) throw new Error('A photo goes to the store before the transaction, never inside it');
-	const { width, height, sizes } = await cleanPhoto(upload);
 	const key = `${shopPrefix(ctx.shopId)}${randomUUID()}`;
-	await Promise.all(
-		PHOTO_SIZES.map((size) => putKey(`${key}/${size}.webp`, sizes[size], 'image/webp'))
-	);
+	// A size goes to the store while the next one is made.
+	const puts: Promise<void>[] = [];
+	const put = (size: PhotoSize, bytes: Buffer) => {
+		const going = putKey(`${key}/${size}.webp`, bytes, 'image/webp');
+		going.catch(() => undefined);
+		puts.push(going);
+	};
+	const { width, height, blur, sizes } = await cleanPhoto(upload, put);
+	await Promise.all(puts);
 	const bytes = PHOTO_SIZES.reduce((sum, size) => sum + sizes[size].length, 0);
-	return { key, width, height, bytes };
+	return { key, width, height, bytes, blur };
 }
 
 /** The row of a picture that is in the store. */

@@ -9,7 +9,13 @@ import sharp from 'sharp';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { NOON, testShops, type TestShop } from '../../../../tests/support/shops';
 import { inShop } from '../context';
-import { addDonorPhoto, takeIn } from '../donors';
+import {
+	addDonorPhoto,
+	putBackDonorPhoto,
+	removeDonorPhoto,
+	removedDonorPhotos,
+	takeIn
+} from '../donors';
 import { listKeys } from '../storage';
 import { cleanPhoto, deletePhoto, keepPhoto, readPhoto, restorePhoto, savePhoto } from '.';
 import { sweepPhotos } from './sweep';
@@ -189,6 +195,7 @@ describe('in the store', () => {
 				.where(and(eq(photo.shopId, ours.ctx.shopId), eq(photo.id, id)))
 		);
 	const picture = () => plain(900, 600).jpeg().toBuffer();
+	const days = (count: number) => new Date(NOON.getTime() + count * 86_400_000);
 
 	it('three sizes stand under a fresh key, never the upload itself', async () => {
 		const sent = await picture();
@@ -218,9 +225,38 @@ describe('in the store', () => {
 	it('one that was taken away can be put back', async () => {
 		const { id } = await savePhoto(ours.ctx, await picture());
 		await deletePhoto(ours.ctx, id);
-		await expect(readPhoto(ours.ctx, id, 'card')).rejects.toThrow(NotFound);
+		for (const size of ['card', 'full'] as const)
+			await expect(readPhoto(ours.ctx, id, size)).rejects.toThrow(NotFound);
+		// To be told apart from others that were taken away, by those who can put it back.
+		(await readPhoto(ours.ctx, id, 'thumb')).destroy();
+		const reader = await ours.as('reader');
+		await expect(readPhoto(reader, id, 'thumb')).rejects.toThrow(NotFound);
+		await expect(readPhoto(theirs.ctx, id, 'thumb')).rejects.toThrow(NotFound);
 		await restorePhoto(ours.ctx, id);
 		(await readPhoto(ours.ctx, id, 'card')).destroy();
+	});
+
+	it('what was taken off a donor is listed with who did it, until it is back or forgotten', async () => {
+		const { number } = await takeIn(ours.ctx, { model: 'TARN-21L' });
+		const { id } = await addDonorPhoto(ours.ctx, number, await picture(), 'label');
+		expect(await removedDonorPhotos(ours.ctx, number)).toEqual([]);
+		const bench = await ours.as('bench');
+		await removeDonorPhoto(bench, number, id);
+		const [removed] = await removedDonorPhotos(ours.ctx, number);
+		expect(removed).toMatchObject({ id, alt: 'label or plate', at: NOON });
+		expect(removed?.by).not.toBe('');
+		expect(await removedDonorPhotos(ours.at(days(31)), number)).toEqual([]);
+		await expect(putBackDonorPhoto(ours.at(days(31)), number, id)).rejects.toThrow(NotFound);
+		await putBackDonorPhoto(ours.ctx, number, id);
+		expect(await removedDonorPhotos(ours.ctx, number)).toEqual([]);
+	});
+
+	it('its row has a tiny picture for the place where it will stand', async () => {
+		const { id } = await savePhoto(ours.ctx, await picture());
+		const [row] = await rowOf(id);
+		const blur = await sharp(Buffer.from(row!.blur, 'base64')).metadata();
+		expect([blur.format, blur.width, blur.height]).toEqual(['webp', 16, 11]);
+		expect(row!.blur.length).toBeLessThan(400);
 	});
 
 	it('is never written to inside a transaction', async () => {
@@ -233,7 +269,7 @@ describe('in the store', () => {
 		const { id } = await addDonorPhoto(ours.ctx, number, await picture(), 'front');
 		await deletePhoto(ours.ctx, id);
 		const [row] = await rowOf(id);
-		const after = (days: number) => ours.at(new Date(NOON.getTime() + days * 86_400_000));
+		const after = (count: number) => ours.at(days(count));
 		await sweepPhotos(after(29));
 		expect(await rowOf(id)).toHaveLength(1);
 		await sweepPhotos(after(31));

@@ -1,7 +1,7 @@
 import { and, eq, inArray, lt } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
 import { listKeys, removeKeys } from '../storage';
-import { shopPrefix } from './keep';
+import { keptSince, shopPrefix } from './keep';
 import { photo } from './tables';
 
 const GRACE_MS = 60 * 60_000;
@@ -21,14 +21,12 @@ const withoutRow = (ctx: Context, stored: string[]): Promise<string[]> =>
 		return stored.filter((key) => !known.has(photoKey(key)));
 	});
 
-/** A photo that was taken away can be put back for so long. */
-const KEPT_DAYS = 30;
-
 const forgetDeleted = (ctx: Context): Promise<unknown> =>
-	inShop(ctx, (tx) => {
-		const before = new Date(ctx.now.getTime() - KEPT_DAYS * 86_400_000);
-		return tx.delete(photo).where(and(eq(photo.shopId, ctx.shopId), lt(photo.deletedAt, before)));
-	});
+	inShop(ctx, (tx) =>
+		tx
+			.delete(photo)
+			.where(and(eq(photo.shopId, ctx.shopId), lt(photo.deletedAt, keptSince(ctx.now))))
+	);
 
 /**
  * Removes the rows of one shop's photos that were taken away long ago, then from the store what has no row

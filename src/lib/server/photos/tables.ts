@@ -12,6 +12,8 @@ export const photo = pgTable(
 		width: integer('width').notNull(),
 		height: integer('height').notNull(),
 		bytes: integer('bytes').notNull(),
+		/** A dozen points of it as a tiny picture, in base64: shown while the real one is on its way. */
+		blur: text('blur').notNull().default(''),
 		takenAt: time('taken_at').notNull(),
 		deletedAt: time('deleted_at')
 	},

@@ -93,6 +93,28 @@ describe('a photo sent to the outside edge', () => {
 		expect([(await photos()).length, await keys()]).toEqual(before);
 	});
 
+	it('kept on a phone under another sign-in does not go out under this one', async () => {
+		const files = [await picture('#4d7c0f')];
+		const before = [(await photos()).length, await keys()];
+		const event = eventOf({ key: 'upload-7', files });
+		event.request.headers.set('photo-taken-by', 'somebody else');
+		const answer = await take({
+			...event,
+			locals: { ...event.locals, person: { id: 'me' } }
+		} as never);
+		expect(answer.status).toBe(403);
+		expect(await answer.json()).toMatchObject({ message: PHOTO_SAID.taker });
+		expect([(await photos()).length, await keys()]).toEqual(before);
+	});
+
+	it('that says it is larger than a photo may be is refused before it is read', async () => {
+		const event = eventOf({ key: 'upload-8', files: [await picture('#000000')] });
+		const headers = { 'idempotency-key': 'upload-8', 'content-length': `${31_000_000}` };
+		const request = { headers: new Headers(headers), formData: () => expect.fail('was read') };
+		const answer = await take({ ...event, request } as never);
+		expect(await answer.json()).toMatchObject({ message: PHOTO_SAID.size });
+	});
+
 	it('that is none is refused in words, and so is a body that is no form', async () => {
 		const refused = await send({ key: 'upload-5', files: [Buffer.from('<svg/>')] });
 		expect(refused.status).toBe(400);

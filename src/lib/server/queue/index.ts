@@ -12,11 +12,13 @@ export interface Task {
 	run(payload: unknown, now: Date): Promise<void>;
 }
 
-let runner: Runner | undefined;
+/** A server that reloads its modules must not leave the runner of the old ones at work. */
+const kept = globalThis as { endplayRunner?: Runner | undefined };
 
 /** Starts working the queue inside this process; picked up within tens of milliseconds. */
 export async function startQueue(tasks: Task[]): Promise<void> {
-	runner = await run({
+	await stopQueue();
+	kept.endplayRunner = await run({
 		connectionString: env().DATABASE_WORKER_URL,
 		concurrency: 2,
 		noHandleSignals: true,
@@ -33,8 +35,9 @@ export async function startQueue(tasks: Task[]): Promise<void> {
 }
 
 export async function stopQueue(): Promise<void> {
-	await runner?.stop();
-	runner = undefined;
+	const { endplayRunner } = kept;
+	kept.endplayRunner = undefined;
+	await endplayRunner?.stop();
 }
 
 const quiet = () =>

@@ -1,11 +1,12 @@
 import { readTag } from '$lib/codes';
 import { and, eq } from 'drizzle-orm';
 import { inShop, type Context } from '../context';
-import { tag, type TAGGED } from './tables';
+import { tag } from './tables';
 
 export interface FoundTag {
 	code: string;
-	what: (typeof TAGGED)[number];
+	/** 'blank' until its first scan says what it hangs on. */
+	what: 'box' | 'part' | 'bin' | 'blank';
 }
 
 /** What a typed or scanned code was given to, or null when it is no code of this shop. */

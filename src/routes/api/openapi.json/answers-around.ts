@@ -1,3 +1,4 @@
+import { BIN_USES } from '$lib/bins/use';
 import { DONOR_STATES, RELEASE_ROUTES, SURENESS } from '$lib/donors/words';
 import { CAUSES } from '$lib/trade';
 import { cents, links, moment, Photo, text } from './answers';
@@ -25,7 +26,8 @@ export const DonorItem = z
 		offMachine: text,
 		takenInAt: moment,
 		partCount: z.int(),
-		photo: links.nullable()
+		photo: links.nullable(),
+		blur: text.describe('The photo as a tiny WebP, in base64')
 	})
 	.openapi('DonorItem');
 export const Donor = DonorItem.extend({
@@ -33,6 +35,8 @@ export const Donor = DonorItem.extend({
 	model: text,
 	typeCode: text,
 	serial: text,
+	dateCode: text,
+	emissionFamily: text.describe('As it stands on the emission label'),
 	displacementCc: z.number().nullable(),
 	fittings: z.array(text),
 	secondCause: text.nullable(),
@@ -40,7 +44,7 @@ export const Donor = DonorItem.extend({
 	note: text,
 	version: z.int(),
 	boxes: z.array(z.object({ tag: text })),
-	photos: z.array(Photo.extend({ shot: text, alt: text })),
+	photos: z.array(Photo.extend({ shot: text, alt: text, blur: text })),
 	release: Release.nullable(),
 	parts: z.array(z.object({ tag: text, kind: text, kindName: text, grade: text, state: text }))
 }).openapi('Donor');
@@ -52,11 +56,21 @@ export const Bin = z
 		address: text,
 		size: text,
 		litres: z.number().nullable(),
+		loadKg: z.number().nullable(),
+		uses: z.array(z.enum(BIN_USES)),
+		kinds: z.array(text),
 		purpose: text,
 		place: text,
 		red: z.boolean(),
 		version: z.int(),
-		parts: z.int()
+		parts: z.int(),
+		room: z.object({
+			holds: z.number().describe('Litres'),
+			litres: z.number().describe('Taken, about'),
+			grams: z.number(),
+			fullness: z.number(),
+			flags: z.array(z.object({ flag: text, said: text, why: text }))
+		})
 	})
 	.openapi('Bin');
 

@@ -35,7 +35,8 @@ export const PartItem = z
 		verdict: verdictWord.nullable(),
 		gainCents: cents,
 		photo: text.nullable(),
-		heldBy: text.nullable()
+		heldBy: text.nullable(),
+		setMissing: text.describe('What is missing from its set')
 	})
 	.openapi('PartItem');
 
@@ -51,6 +52,7 @@ export const Verdict = z
 		askedCents: cents,
 		breakEvenUsedCents: cents,
 		breakEvenNewCents: cents,
+		waitingFor: text.nullable().describe('Who waits for it, without a name'),
 		terms: z.array(VerdictTerm).describe('Empty for those who may not see them')
 	})
 	.openapi('Verdict');
@@ -60,6 +62,7 @@ const Proof = z.object({
 	how: z.enum(PROOFS),
 	figure: z.number().nullable(),
 	unit: text,
+	figures: z.array(z.object({ field: text, value: z.number(), unit: text })),
 	passed: z.boolean(),
 	note: text,
 	by: text,
@@ -70,7 +73,6 @@ export const Part = PartItem.omit({ photo: true })
 		version: z.int(),
 		numbers: z.array(text),
 		set: text,
-		setMissing: text,
 		massGrams: z.int().nullable(),
 		note: text,
 		heldUntil: moment.nullable(),
@@ -78,9 +80,26 @@ export const Part = PartItem.omit({ photo: true })
 		scrapReason: text.nullable(),
 		pulledAt: moment,
 		proofs: z.array(Proof),
-		photos: z.array(Photo.extend({ alt: text })),
+		photos: z.array(Photo.extend({ alt: text, blur: text })),
 		worth: Verdict.nullable(),
 		next: PartItem.nullable().describe('The next unit that would answer the same call'),
 		taken: text.nullable()
 	})
 	.openapi('Part');
+
+const place = z.number().min(0).max(1).describe('Share of the picture, from the left or from above');
+const PinPart = z
+	.object({ tag: text, label: text, grade: z.enum(GRADES), state: z.enum(PART_STATES) })
+	.extend({ place: text.nullable().describe('Address of its bin, or tag of its box') });
+export const Pin = z
+	.object({
+		id: z.int(),
+		photo: z.int(),
+		n: z.int().describe('The number on the pin, of its photo alone'),
+		x: place,
+		y: place,
+		kind: text,
+		kindName: text,
+		part: PinPart.nullable().describe('Null while the kind is still to be pulled')
+	})
+	.openapi('Pin');

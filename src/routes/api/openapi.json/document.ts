@@ -5,21 +5,31 @@ import {
 	type RouteConfig
 } from '@asteasolutions/zod-to-openapi';
 import { Fault } from './answers';
+import { bench } from './bench';
 import { donorWorth } from './donor-worth';
 import { donors } from './donors';
 import { parts } from './parts';
 import { z, type Row } from './row';
 import { shelf } from './shelf';
+import { wants } from './wants';
+import { walks } from './walks';
 import { worth } from './worth';
+import { yard } from './yard';
 
-export const rows: readonly Row[] = [...donors, ...donorWorth, ...parts, ...shelf, ...worth];
+export const rows: readonly Row[] = [...donors, ...bench, ...donorWorth, ...parts, ...shelf, ...walks, ...wants, ...worth,
+	...yard];
 
 const PARAMS: Record<string, string> = {
 	shop: 'Slug of the shop',
 	donor: 'Number of the donor, D12, or the tag of one of its boxes',
 	part: 'Tag of the part',
+	bin: 'Address of the bin, or its tag',
+	walk: 'Number of the walk',
+	want: 'Number of the want, W12',
+	customer: 'Id of the customer',
 	tag: 'Any tag, as typed',
 	id: 'Id of the photo',
+	run: 'Number of the scrap run',
 	size: 'thumb, card or full',
 	call:
 		'usedPrice, gain, keepCleaning, pullPlan, decide, allocate, carry, learnChance, learnRate or learnShare'
@@ -53,15 +63,19 @@ function params(path: string): z.ZodObject {
 function sent({ body, form }: Row) {
 	if (body) return { required: true, content: { 'application/json': { schema: body } } };
 	if (!form) return undefined;
-	const file = z.string().openapi({ format: 'binary', description: 'JPEG, PNG, WebP or AVIF' });
+	const file = z.string().openapi({ format: 'binary', description: 'JPEG, PNG, WebP, AVIF or HEIC' });
 	return { required: true, content: { 'multipart/form-data': { schema: form.extend({ file }) } } };
 }
 
+function contentOf(gives: Row['gives']): Record<string, { schema: z.ZodType }> {
+	if (gives === 'picture')
+		return { 'image/webp': { schema: z.string().openapi({ format: 'binary' }) } };
+	if (gives === 'stream') return { 'text/event-stream': { schema: z.string() } };
+	return { 'application/json': { schema: gives } };
+}
+
 function answers(row: Row): RouteConfig['responses'] {
-	const content: Record<string, { schema: z.ZodType }> =
-		row.gives === 'picture'
-			? { 'image/webp': { schema: z.string().openapi({ format: 'binary' }) } }
-			: { 'application/json': { schema: row.gives } };
+	const content = contentOf(row.gives);
 	const refused = [400, 401, 403, 404, ...(row.shut ? [409] : []), ...(isChange(row) ? [422] : [])];
 	const faults = refused.map((status) => [
 		status,

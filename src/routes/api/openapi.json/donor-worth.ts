@@ -4,6 +4,7 @@ import { Decide, Decided, Planned, PlannedBelow, PlannedStep, Tip } from './wort
 
 const kindName = z.string();
 const goesWith = z.string().nullable().describe('The whole that it stays with');
+const waitingFor = z.string().nullable().describe('Who waits for it, without a name');
 const rough = z.boolean().describe('Counted at the middle of its kind: it has no price');
 
 const Plan = Planned.extend({
@@ -14,6 +15,7 @@ const Plan = Planned.extend({
 			kindName,
 			rough,
 			goesWith,
+			waitingFor,
 			opens: z.array(z.string()).describe('What it opens the way to, where it is not kept'),
 			givenUpFor: z.array(z.string()).describe('What it is given up for, though worth keeping')
 		})
@@ -23,6 +25,7 @@ const Plan = Planned.extend({
 			kindName,
 			rough,
 			goesWith,
+			waitingFor,
 			sacrificedFor: z.array(z.string()).describe('What spoils it on its way off'),
 			spoils: z.array(z.string()).describe('What is kept and would be spoiled by it')
 		})

@@ -1,8 +1,11 @@
 import { DonorFilter } from '$lib/donors/filter';
+import { AskReading } from '$lib/donors/label-form';
 import { DonorEdit, MoveInput, ReleaseInput, ShotInput, TakeIn } from '$lib/donors/input';
+import { Pin as PinInput } from '$lib/parts/box/input';
 import { Pull } from '$lib/parts/input';
-import { Part, Photo } from './answers';
+import { Part, Photo, Pin } from './answers';
 import { Donor, DonorItem } from './answers-around';
+import { LabelReadings } from './label-answers';
 import { z, type Row } from './row';
 
 const one = '/donors/{donor}';
@@ -58,7 +61,6 @@ export const donors: Row[] = [
 	},
 	move('strip', 'Puts it on the bench, once its gates are open'),
 	move('park', 'Keeps it whole, for pulling when somebody calls'),
-	move('finish', 'Says that it is stripped'),
 	move('reopen', 'Takes a stripped donor back to the bench'),
 	{
 		method: 'post',
@@ -68,6 +70,38 @@ export const donors: Row[] = [
 		form: ShotInput,
 		status: 201,
 		gives: Photo
+	},
+	{
+		method: 'get',
+		path: `${one}/pins`,
+		said: 'The numbered pins on its photos',
+		may: 'see',
+		gives: z.object({ items: z.array(Pin) })
+	},
+	{
+		method: 'post',
+		path: `${one}/pins`,
+		said: 'Sets a pin on one of its photos, for a part or for a kind still on it',
+		may: 'work',
+		body: PinInput,
+		status: 201,
+		gives: Pin
+	},
+	{
+		method: 'get',
+		path: `${one}/readings`,
+		said: 'What was read off its photos: of each the newest, to be accepted or corrected',
+		may: 'see',
+		gives: LabelReadings
+	},
+	{
+		method: 'post',
+		path: `${one}/readings`,
+		said: 'Has the text on one of its photos read; done a few seconds later',
+		may: 'work',
+		body: AskReading,
+		status: 201,
+		gives: z.object({ id: z.int() })
 	},
 	{
 		method: 'post',

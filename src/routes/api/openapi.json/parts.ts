@@ -1,5 +1,8 @@
+import { ShotInput } from '$lib/donors/input';
 import { FindQuery } from '$lib/find/input';
+import { FitNote, Replaced } from '$lib/parts/fits';
 import {
+	Clean,
 	Edit,
 	Fit,
 	Hold,
@@ -9,10 +12,11 @@ import {
 	Proof,
 	Scrap,
 	Sell,
-	TakeBack
+	TakeBack,
+	UndoPart
 } from '$lib/parts/input';
 import type { Ability } from '$lib/people/role';
-import { Part, PartItem, Photo, VerdictWithSources } from './answers';
+import { moment, Part, PartItem, Photo, VerdictWithSources } from './answers';
 import { z, type Row } from './row';
 
 const one = '/parts/{part}';
@@ -73,6 +77,31 @@ const Found = z.object({
 	next: z.string().nullable()
 });
 
+const Fits = z.object({
+	items: z.array(
+		z.object({
+			id: z.int(),
+			engine: z.string(),
+			fits: z.boolean(),
+			because: z.string(),
+			bothWays: z.boolean(),
+			by: z.string(),
+			at: moment
+		})
+	)
+});
+const ReplacedNumbers = z.object({
+	items: z.array(
+		z.object({
+			id: z.int(),
+			oldNumber: z.string(),
+			newNumber: z.string(),
+			bothWays: z.boolean(),
+			note: z.string()
+		})
+	)
+});
+
 export const parts: Row[] = [
 	{
 		method: 'get',
@@ -117,14 +146,50 @@ export const parts: Row[] = [
 	verb('take-back', 'trade', TakeBack, 'Takes a part back into the red bin'),
 	verb('scrap', 'work', Scrap, 'Scraps or destroys it'),
 	verb('proof', 'work', Proof, 'Records how it was checked'),
+	verb('clean', 'work', Clean, 'Notes an attempt at cleaning it, and whether it came right'),
+	verb('undo', 'work', UndoPart, 'Takes back the newest thing that was done with it'),
 	verb('miss', 'work', Nothing, 'Says that it is not where it should be'),
 	verb('found', 'work', Nothing, 'Says that a missing part is there again'),
+	{
+		method: 'get',
+		path: `${one}/fits`,
+		said: 'What it was tried on, with what its like were tried on, the newest first',
+		may: 'see',
+		gives: Fits
+	},
+	{
+		method: 'post',
+		path: `${one}/fits`,
+		said: 'Notes that it was tried on an engine: it fits, or it does not and why',
+		may: 'work',
+		body: FitNote,
+		status: 201,
+		gives: Fits
+	},
+	{
+		method: 'post',
+		path: '/numbers/replaced',
+		said: 'Notes that one part number takes the place of another',
+		may: 'work',
+		body: Replaced,
+		status: 201,
+		gives: ReplacedNumbers
+	},
 	{
 		method: 'post',
 		path: `${one}/photos`,
 		said: 'Adds a photo to a part',
 		may: 'work',
 		form: z.object({}),
+		status: 201,
+		gives: Photo
+	},
+	{
+		method: 'post',
+		path: '/photos',
+		said: 'Adds a photo to whatever carries a tag, or to the donor of a number',
+		may: 'work',
+		form: z.object({ of: z.string().max(40).describe('A tag, or D12'), shot: ShotInput.shape.shot }),
 		status: 201,
 		gives: Photo
 	}

@@ -7,7 +7,7 @@ extendZodWithOpenApi(z);
 
 /** One call of the outside edge. */
 export interface Row {
-	method: 'get' | 'post' | 'put' | 'patch';
+	method: 'get' | 'post' | 'put' | 'patch' | 'delete';
 	/** As routes spell it, from /api/{shop} on; '' for a call outside a shop. */
 	path: string;
 	said: string;
@@ -17,7 +17,7 @@ export interface Row {
 	/** Sent as a form with the file in the field `file` and these beside it. */
 	form?: z.ZodObject;
 	status?: 200 | 201;
-	gives: z.ZodType | 'picture';
+	gives: z.ZodType | 'picture' | 'stream';
 	/** Figures in, figures out: nothing changes, so no Idempotency-Key. */
 	changesNothing?: boolean;
 	/** Can be refused with 409: taken, changed meanwhile, a gate shut. */

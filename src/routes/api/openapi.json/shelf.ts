@@ -1,4 +1,5 @@
 import { BinInput } from '$lib/bins/input';
+import { PutAway } from '$lib/parts/input';
 import { PHOTO_SIZES } from '$lib/photos/links';
 import { PriceInput } from '$lib/prices/input';
 import { PRICE_SORTS } from '$lib/prices/view';
@@ -60,8 +61,22 @@ export const shelf: Row[] = [
 		gives: z.union([
 			z.object({ what: z.literal('part'), code, part: Part }),
 			z.object({ what: z.literal('bin'), code, bin: Bin }),
-			z.object({ what: z.literal('box'), code, donor: Donor })
+			z.object({ what: z.literal('box'), code, donor: Donor }),
+			z.object({ what: z.literal('blank'), code })
 		])
+	},
+	{
+		method: 'post',
+		path: '/put-away',
+		said: 'Puts several parts into one bin or box; those that may not go there are said',
+		may: 'work',
+		body: PutAway,
+		gives: z.object({
+			to: z.string(),
+			put: z.array(z.object({ tag: z.string(), eventId: z.number() })),
+			there: z.array(z.string()),
+			refused: z.array(z.object({ tag: z.string(), said: z.string() }))
+		})
 	},
 	{
 		method: 'get',

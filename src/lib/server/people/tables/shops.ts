@@ -27,6 +27,9 @@ export const shop = pgTable(
 		units: text('units', { enum: UNITS }).notNull(),
 		season: text('season', { enum: SEASONS }).notNull(),
 		lastDonorNumber: integer('last_donor_number').notNull().default(0),
+		lastWantNumber: integer('last_want_number').notNull().default(0),
+		lastReleaseNumber: integer('last_release_number').notNull().default(0),
+		lastScrapRunNumber: integer('last_scrap_run_number').notNull().default(0),
 		version: integer('version').notNull().default(1),
 		createdAt: time('created_at').notNull()
 	},

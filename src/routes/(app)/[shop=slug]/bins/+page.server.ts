@@ -1,12 +1,20 @@
 import { BinAgain } from '$lib/bins/input';
 import { drawRacks } from '$lib/bins/rack';
+import { isShade, shading, type Shade } from '$lib/bins/shade';
 import { listBins, listRetiredBins, useBinAgain } from '$lib/server/bins';
 import { action, page } from '$lib/server/people';
-import type { RequestEvent } from './$types';
+import { daysInBins, moneyInBins } from '$lib/server/walks';
+import type { PageServerLoadEvent, RequestEvent } from './$types';
 
-export const load = page('see', async (ctx) => {
+const known = (by: Shade, ctx: Parameters<typeof moneyInBins>[0]) =>
+	by === 'money' ? moneyInBins(ctx) : by === 'age' ? daysInBins(ctx) : new Map<number, number>();
+
+export const load = page('see', async (ctx, { url }: PageServerLoadEvent) => {
+	const asked = url.searchParams.get('shade');
+	const by: Shade = isShade(asked) ? asked : 'fullness';
 	const bins = await listBins(ctx);
-	return { bins, ...drawRacks(bins), retired: await listRetiredBins(ctx), wide: true };
+	const shade = { by, ...shading(bins, by, await known(by, ctx)) };
+	return { bins, ...drawRacks(bins), shade, retired: await listRetiredBins(ctx), wide: true };
 });
 
 export const actions = {

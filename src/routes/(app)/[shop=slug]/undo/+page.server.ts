@@ -1,6 +1,7 @@
 import { Undo } from '$lib/parts/form';
 import { action, page } from '$lib/server/people';
-import { undoPart } from '$lib/server/parts';
+import { undoChanges } from '$lib/server/parts';
+import { undoBinChange } from '$lib/server/walks';
 
 export const load = page('see', (_ctx, { params }) => ({
 	back: { href: `/${params.shop}/parts`, label: 'Find' }
@@ -8,7 +9,9 @@ export const load = page('see', (_ctx, { params }) => ({
 
 export const actions = {
 	default: action('work', Undo, async (ctx, { event, back }) => {
-		await undoPart(ctx, event);
+		const [only, ...others] = event;
+		const ofBin = only !== undefined && others.length === 0 && (await undoBinChange(ctx, only));
+		if (!ofBin) await undoChanges(ctx, event);
 		return { to: `${back}${back.includes('?') ? '&' : '?'}done=Undone` };
 	})
 };

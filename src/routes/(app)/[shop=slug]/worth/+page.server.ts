@@ -1,5 +1,6 @@
 import { engineKey } from '$lib/codes/number';
 import { SeasonSwitch } from '$lib/people/input';
+import { LimitsForm, ownLimits } from '$lib/people/limits-input';
 import {
 	FamilyForm,
 	KindForm,
@@ -46,6 +47,15 @@ export const actions = {
 		const families = mark === 'some' ? others : { ...others, [engineKey(engine)]: mark };
 		await editPolicy(ctx, { own: ownOf({ ...policy, families }), version });
 		return done(`${engine}: ${mark} about`);
+	}),
+	limits: action('run', LimitsForm, async (ctx, { kind, limits, version }) => {
+		const { policy } = await getPolicyRow(ctx);
+		const { [kind]: _, ...others } = policy.limits;
+		const own = ownLimits(limits);
+		const all = Object.keys(own).length > 0 ? { ...others, [kind]: own } : others;
+		const next = ownOf({ ...policy, limits: all as typeof policy.limits });
+		await editPolicy(ctx, { own: next, version });
+		return { to: `?kind=${kind}&done=Limits saved#limits` };
 	}),
 	kind: action('run', KindForm, async (ctx, form) => {
 		const { policy } = await getPolicyRow(ctx);

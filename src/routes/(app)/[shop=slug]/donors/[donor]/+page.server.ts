@@ -12,9 +12,11 @@ import * as donors from '$lib/server/donors';
 import { firstPhotos } from '$lib/server/parts';
 import { action, page } from '$lib/server/people';
 import { actionWithPhotos } from '$lib/server/photos';
+import { donorWanted } from '$lib/server/wants';
 import type { PageServerLoadEvent, RequestEvent } from './$types';
 import { back, moved } from './moves';
 import { addPhotos, putBackPhoto, removePhoto } from './photos';
+import { plateOf } from './plate';
 import { donorWorth } from './worth';
 
 export const load = page('see', async (ctx, { params, url }: PageServerLoadEvent) => {
@@ -23,13 +25,16 @@ export const load = page('see', async (ctx, { params, url }: PageServerLoadEvent
 		donor,
 		today: await donors.todayIn(ctx),
 		makers: await donors.listMakers(ctx),
+		plate: await plateOf(ctx, params.donor, url),
 		...donorOptions,
 		...(await donorWorth(ctx, donor, url)),
+		wanted: await donorWanted(ctx, donor.id),
 		partPhotos: await firstPhotos(
 			ctx,
 			donor.parts.map((part) => part.tag)
 		),
 		removed: url.searchParams.get('removed'),
+		photosAway: await donors.removedDonorPhotos(ctx, params.donor),
 		back: { href: `/${params.shop}/donors`, label: 'Donors' },
 		short: `${donor.number} · ${donor.tag}`
 	};
@@ -38,7 +43,8 @@ export const load = page('see', async (ctx, { params, url }: PageServerLoadEvent
 export const actions = {
 	strip: action('work', MoveInput, moved(donors.stripDonor, 'On the bench')),
 	park: action('work', MoveInput, moved(donors.parkDonor, 'Parked')),
-	finish: action('work', MoveInput, moved(donors.finishDonor, 'Stripped')),
+	review: action('work', MoveInput, moved(donors.reviewDonor, 'Stays parked')),
+	bringBack: action('work', MoveInput, moved(donors.bringBackDonor, 'It is back')),
 	reopen: action('work', MoveInput, moved(donors.reopenDonor, 'Reopened')),
 	photos: actionWithPhotos('work', ShotInput, 'file', addPhotos),
 	removePhoto: action('work', PhotoRef, removePhoto),

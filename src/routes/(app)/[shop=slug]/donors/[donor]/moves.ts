@@ -1,6 +1,5 @@
 import type { MoveInput } from '$lib/donors/input';
 import type { Context } from '$lib/server/context';
-import type { stripDonor } from '$lib/server/donors';
 import type { RequestEvent } from './$types';
 
 /** Back to the donor, saying what was done. */
@@ -10,7 +9,7 @@ export const back = ({ params }: RequestEvent, done: string, more = '') => ({
 
 /** One step on the donor's way, then back to its page. */
 export const moved =
-	(verb: typeof stripDonor, done: string) =>
+	(verb: (ctx: Context, ref: string, input: MoveInput) => Promise<unknown>, done: string) =>
 	async (ctx: Context, input: MoveInput, event: RequestEvent) => {
 		await verb(ctx, event.params.donor, input);
 		return back(event, done);

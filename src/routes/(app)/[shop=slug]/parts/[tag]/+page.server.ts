@@ -1,13 +1,23 @@
 import { Nothing } from '$lib/parts/input';
 import { MOVES, whyNot, type Move } from '$lib/parts/state';
 import type { PartView } from '$lib/parts/view';
-import { foundPart, freePart, getPart, hangPhoto, listFits, missPart } from '$lib/server/parts';
+import {
+	cleaningFor,
+	foundPart,
+	freePart,
+	getPart,
+	listFits,
+	listPinsOfPart,
+	missPart,
+	removedPartPhotos
+} from '$lib/server/parts';
 import { listReplaced } from '$lib/server/prices';
 import { action, page } from '$lib/server/people';
-import { actionWithPhotos } from '$lib/server/photos';
+import { partWanted } from '$lib/server/wants';
 import { causeSaid, isCauseId, whyChance } from '$lib/trade';
-import { plural } from '$lib/format';
+import { benchActions } from './bench';
 import { fitActions } from './fits';
+import { photoActions } from './photos';
 import { after } from './sheet';
 import type { PageServerLoadEvent, RequestEvent } from './$types';
 
@@ -20,8 +30,12 @@ export const load = page('see', async (ctx, { params }: PageServerLoadEvent) => 
 		part,
 		open: ASKED.filter((move) => whyNot(move, part) === null),
 		causes: causesOf(part),
+		cleaning: ['out', 'scrapped'].includes(part.state) ? null : await cleaningFor(ctx, part.tag),
+		wanted: await partWanted(ctx, part.id),
 		fits: await listFits(ctx, part.tag),
+		pins: await listPinsOfPart(ctx, part.tag),
 		replaced: await listReplaced(ctx, part.numbers),
+		photosAway: await removedPartPhotos(ctx, part.tag),
 		back: { href: `/${params.shop}/parts`, label: 'Find' },
 		short: part.tag
 	};
@@ -35,6 +49,7 @@ const causesOf = ({ kind, donorOf }: PartView) =>
 
 export const actions = {
 	...fitActions,
+	...benchActions,
 	free: action('hold', Nothing, async (ctx, _input, event: RequestEvent) =>
 		after(event, await freePart(ctx, event.params.tag), 'Freed')
 	),
@@ -44,17 +59,5 @@ export const actions = {
 	find: action('work', Nothing, async (ctx, _input, event: RequestEvent) =>
 		after(event, await foundPart(ctx, event.params.tag), 'Back where it belongs')
 	),
-	photos: actionWithPhotos(
-		'work',
-		Nothing,
-		'file',
-		async (ctx, _input, kept, event: RequestEvent) => {
-			for (const photo of kept) await hangPhoto(ctx, event.params.tag, photo);
-			return after(
-				event,
-				{ tag: event.params.tag },
-				plural(kept.length, 'photo added', 'photos added')
-			);
-		}
-	)
+	...photoActions
 };

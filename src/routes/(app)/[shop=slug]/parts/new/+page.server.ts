@@ -1,7 +1,7 @@
 import { LogForm } from '$lib/parts/form';
 import { foundKinds, loggedSaid } from '$lib/parts/logging';
 import { page } from '$lib/server/people';
-import { chanceOn, logOldStock, usualKinds } from '$lib/server/parts';
+import { binsFor, chanceOn, logOldStock, usualKinds } from '$lib/server/parts';
 import { actionWithPhotos } from '$lib/server/photos';
 import { checklist, isKindId, kind } from '$lib/trade';
 import type { PageServerLoadEvent, RequestEvent } from './$types';
@@ -33,6 +33,7 @@ async function chosenKind(ctx: Parameters<typeof chanceOn>[0], id: string) {
 		level,
 		never,
 		why: null,
+		bins: await binsFor(ctx, id),
 		checklist: checklist(id)
 	};
 }

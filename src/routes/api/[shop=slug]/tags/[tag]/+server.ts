@@ -12,5 +12,6 @@ export const GET = read('see', async (ctx, { params }: RequestEvent) => {
 	const { what, code } = found;
 	if (what === 'part') return { what, code, part: await getPart(ctx, code) };
 	if (what === 'bin') return { what, code, bin: await getBin(ctx, code) };
+	if (what === 'blank') return { what, code };
 	return { what, code, donor: await getDonor(ctx, code) };
 });

@@ -5,9 +5,11 @@ import { minutesIn } from '$lib/parts/choices-form';
 import { foundKinds, loggedSaid } from '$lib/parts/logging';
 import { getDonor, todayIn } from '$lib/server/donors';
 import { page } from '$lib/server/people';
-import { chanceOn, countDonorParts, kindsStillOn, planFor, pullPart } from '$lib/server/parts';
+import { countDonorParts, kindsStillOn, planFor, pullPart } from '$lib/server/parts';
 import { actionWithPhotos } from '$lib/server/photos';
-import { checklist, isCauseId, isKindId, kind, whyChance } from '$lib/trade';
+import { donorWanted } from '$lib/server/wants';
+import { isKindId, kind } from '$lib/trade';
+import { chosenKind } from './chosen';
 import type { PageServerLoadEvent, RequestEvent } from './$types';
 
 export const load = page('work', async (ctx, { params, url }: PageServerLoadEvent) => {
@@ -22,6 +24,7 @@ export const load = page('work', async (ctx, { params, url }: PageServerLoadEven
 	return {
 		donor: { number, engine, causeSaid },
 		open: canPull(donor, donor.release, await todayIn(ctx)),
+		wanted: isKindId(id) ? [] : await donorWanted(ctx, donor.id),
 		logged: plural(count, 'part logged', 'parts logged'),
 		kinds,
 		minutes,
@@ -35,26 +38,6 @@ export const load = page('work', async (ctx, { params, url }: PageServerLoadEven
 		short: number
 	};
 });
-
-type Ctx = Parameters<typeof chanceOn>[0];
-type Donor = Awaited<ReturnType<typeof getDonor>>;
-
-async function chosenKind(ctx: Ctx, id: string, donor: Donor) {
-	const { name, system, howTested } = kind(id);
-	const { chance, level, never } = await chanceOn(ctx, id, donor);
-	const why = donor.cause && isCauseId(donor.cause) ? whyChance(id, donor.cause) : null;
-	return {
-		kind: id,
-		kindName: name,
-		system,
-		howTested,
-		chance,
-		level,
-		never,
-		why,
-		checklist: checklist(id)
-	};
-}
 
 export const actions = {
 	log: actionWithPhotos('work', LogForm, 'photo', async (ctx, input, kept, event: RequestEvent) => {

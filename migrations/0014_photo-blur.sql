@@ -1,0 +1,1 @@
+ALTER TABLE "photo" ADD COLUMN "blur" text DEFAULT '' NOT NULL;
