@@ -1,5 +1,5 @@
 import type { Page } from '@playwright/test';
-import { expect, ready, signIn, test } from '../support/browser';
+import { change, expect, ready, signIn, test } from '../support/browser';
 import { findShown, type Shown } from '../support/screens';
 
 /** Words that blame, beg or leak. */
@@ -34,7 +34,7 @@ const badForms = (one: Shown): Bad[] => {
 		{ path: `${part}/use`, button: 'Sold', typed: { price: 'ten', to: 'a neighbour' } },
 		{ path: `${part}/use`, button: 'Fitted' },
 		{ path: `${part}/scrap`, button: 'Scrap it' },
-		{ path: `${part}/prove`, button: 'Passed', typed: { unit: 'psi' } },
+		{ path: `${part}/prove`, button: 'Passed', typed: { note: 'held all day' } },
 		{ path: `/osiergate/parts/${one.out}/back`, button: 'Take it back' },
 		{ path: '/osiergate/bins/new', button: 'Add the bin', typed: { purpose: 'odds and ends' } },
 		{ path: `/osiergate/bins/${one.bin}`, button: 'Save the bin', typed: { address: '' } },
@@ -101,7 +101,8 @@ test('a form with a fault says so at the top and at the field, and keeps every a
 }) => {
 	test.setTimeout(120_000);
 	await signIn(page, 'owner');
-	for (const bad of badForms(await findShown(page)))
+	const { number } = await change(page, 'donors', { model: 'FORM-1' });
+	for (const bad of badForms({ ...(await findShown(page)), whole: number }))
 		await test.step(`${bad.path}: ${bad.button}`, () => sendBadly(page, bad));
 });
 

@@ -31,7 +31,7 @@ test('the pull plan for the minutes at hand, and how it follows the work', async
 	await ready(page);
 	const plan = page.getByRole('region', { name: 'Pull plan' });
 	const steps = plan.locator('li:not(.under)');
-	await plan.getByRole('link', { name: '30 min' }).click();
+	await plan.getByRole('link', { name: '30 min', exact: true }).click();
 	await expect(page).toHaveURL(/minutes=30/);
 	await expect(plan.getByText(/^\d+(\.\d)? of 30 min: keep \d+ parts?, then stop\./)).toBeVisible();
 	await expect(plan.getByText('Stop here')).toBeVisible();
@@ -49,7 +49,10 @@ test('the pull plan for the minutes at hand, and how it follows the work', async
 
 	await expect(page.getByRole('status')).toContainText('kept');
 	await expect(page).toHaveURL(/minutes=30/);
-	await expect(plan.getByRole('link', { name: '30 min' })).toHaveAttribute('aria-current', 'true');
+	await expect(plan.getByRole('link', { name: '30 min', exact: true })).toHaveAttribute(
+		'aria-current',
+		'true'
+	);
 	await expect(plan.locator('strong').filter({ hasText: last })).toHaveCount(0);
 	await page.getByRole('button', { name: 'Undo' }).click();
 	await expect(page.getByRole('status')).toContainText(/undone/i);

@@ -1,5 +1,5 @@
 import type { Page } from '@playwright/test';
-import { expect, ready, signIn, test } from '../support/browser';
+import { change, expect, ready, signIn, test } from '../support/browser';
 
 const shop = '/osiergate';
 const letters = () =>
@@ -17,16 +17,6 @@ async function makeRack(page: Page): Promise<string> {
 	await page.getByRole('button', { name: 'Make the rack' }).click();
 	await expect(page.getByRole('status').first()).toContainText(`Rack ${rack}: 4 bins made`);
 	return rack;
-}
-
-/** A change through the outside edge, as the signed-in member. */
-async function change(page: Page, path: string, data: object) {
-	const done = await page.request.post(`/api${shop}/${path}`, {
-		data,
-		headers: { 'Idempotency-Key': crypto.randomUUID(), origin: new URL(page.url()).origin }
-	});
-	expect(done.ok(), await done.text()).toBe(true);
-	return done.json();
 }
 
 /** Old stock; returns its tag. */

@@ -1,18 +1,9 @@
 import type { Page } from '@playwright/test';
-import { randomUUID } from 'node:crypto';
-import { expect, letterTo, ready, signIn, test } from '../support/browser';
+import { change, expect, letterTo, ready, signIn, test } from '../support/browser';
 import { BASE } from '../support/visitor';
 
 const run = Date.now().toString(36).toUpperCase();
 const SHOP = '/osiergate';
-
-/** A change by the outside edge as the one who is signed in. */
-async function change(page: Page, path: string, data: object, method: 'post' | 'put' = 'post') {
-	const headers = { 'idempotency-key': randomUUID(), origin: BASE };
-	const answer = await page.request[method](`/api${SHOP}/${path}`, { data, headers });
-	expect(answer.ok(), `${path}: ${await answer.text()}`).toBe(true);
-	return answer.json();
-}
 
 /** Looks again until the work in the background is done. */
 const until = (page: Page, seen: () => Promise<void>) =>
@@ -109,20 +100,26 @@ test('a search in vain becomes a want in one tap; a want moves the plan', async 
 	const what = { maker, model, class: 'R1', fittings: ['12 V start'], cause: 'stale-fuel' };
 	const donor = await change(page, 'donors', what);
 	const day = new Date().toISOString().slice(0, 10);
-	const price = { kind: 'ringgear', engine, newCents: 8000, source: 'Counter book', seenOn: day };
+	const price = {
+		kind: 'hourmeter',
+		engine,
+		newCents: 12_000,
+		source: 'Counter book',
+		seenOn: day
+	};
 	await change(page, 'prices', price, 'put');
 	const plan = async () =>
 		(await page.request.get(`/api${SHOP}/donors/${donor.number}/plan`)).json();
 	const before = await plan();
-	const kept = ({ order }: { order: { id: string; keep: boolean }[] }) =>
-		order.filter(({ keep }) => keep).map(({ id }) => id);
-	expect(kept(before)).not.toContain('ringgear');
+	const waits = ({ order }: { order: { id: string; waitingFor: string | null }[] }) =>
+		order.filter(({ waitingFor }) => waitingFor).map(({ id }) => id);
+	expect(waits(before)).not.toContain('hourmeter');
 
-	await page.goto(`${SHOP}/parts?q=${encodeURIComponent(`ring gear wv-${run}`)}`);
+	await page.goto(`${SHOP}/parts?q=${encodeURIComponent(`hour meter wv-${run}`)}`);
 	await ready(page);
 	await page.getByRole('link', { name: 'Somebody waits for it' }).click();
 	await ready(page);
-	await expect(page.getByLabel('Kind of part')).toHaveValue('ringgear');
+	await expect(page.getByLabel('Kind of part')).toHaveValue('hourmeter');
 	await expect(page.getByLabel('Engine, in any words')).toHaveValue(`wv-${run.toLowerCase()}`);
 	await page.getByRole('radio', { name: 'A job of our own' }).check();
 	await page.getByLabel('The job').fill(`red tiller ${run}`);
@@ -131,10 +128,13 @@ test('a search in vain becomes a want in one tap; a want moves the plan', async 
 	await expect(page.getByText(`On donor ${donor.number}`)).toBeVisible();
 
 	const after = await plan();
-	expect(kept(after)).toContain('ringgear');
+	expect(waits(after)).toContain('hourmeter');
+	expect(after.totalCents).toBeGreaterThan(before.totalCents);
 	await page.getByRole('button', { name: 'Take it off the list' }).click();
 	await expect(page.getByText('Taken off the list', { exact: true }).first()).toBeVisible();
-	expect(kept(await plan())).not.toContain('ringgear');
+	const again = await plan();
+	expect(waits(again)).not.toContain('hourmeter');
+	expect(again.totalCents).toBeLessThan(after.totalCents);
 });
 
 test('a customer is found, changed, handed over and deleted', async ({ page }) => {

@@ -1,5 +1,5 @@
 import { expect, test as plain, type Page } from '@playwright/test';
-import { PASSWORD } from './visitor';
+import { BASE, PASSWORD } from './visitor';
 
 /** The cast of the demo by what they do. */
 export const CAST = {
@@ -66,4 +66,17 @@ export async function letterTo(address: string): Promise<Letter> {
 		expect(newest, `a letter to ${address}`).toBeDefined();
 	}).toPass({ timeout: 15_000 });
 	return newest!;
+}
+
+/** A change of the demo shop by the outside edge, as the one who is signed in. */
+export async function change(
+	page: Page,
+	path: string,
+	data: object,
+	method: 'post' | 'put' = 'post'
+) {
+	const headers = { 'idempotency-key': crypto.randomUUID(), origin: BASE };
+	const answer = await page.request[method](`/api/osiergate/${path}`, { data, headers });
+	expect(answer.ok(), `${path}: ${await answer.text()}`).toBe(true);
+	return answer.json();
 }
