@@ -395,7 +395,7 @@ const PIECES = [
 	...['pullableDonor', 'pricesFor', 'expireHolds', 'chanceBy', 'recentFigures'],
 	...['newToken', 'tokenHash', 'customerRow', 'knownCustomer', 'writeLetter', 'templateFor'],
 	...['findLetter', 'startLetters', 'stopLetters', 'quietWants', 'SHOWN'],
-	...['lastCounted', 'shelves', 'binEvent', 'recordUndone', 'undoBinChange'],
+	...['lastCounted', 'shelves', 'binEvent', 'recordUndone', 'undoBinChange', 'undoDonorMove'],
 	...['mintTag', 'strangerWaits', 'tagOwner']
 ];
 

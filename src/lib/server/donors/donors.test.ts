@@ -10,7 +10,8 @@ import { testShops, type TestShop } from '../../../../tests/support/shops';
 import { editPolicy } from '../people';
 import { event } from '../people/tables';
 import { keepPhoto } from '../photos';
-import { findTag } from '../tags';
+import { part } from '../parts/tables';
+import { findTag, mintTag } from '../tags';
 import {
 	addBox,
 	addDonorPhoto,
@@ -31,7 +32,9 @@ import {
 	reviewDonor,
 	stripDonor,
 	takeIn,
-	tickSafe
+	tickSafe,
+	undoDonorMove,
+	donorRow
 } from '.';
 
 let ours: TestShop;
@@ -193,6 +196,32 @@ describe('the way to the bench', () => {
 		expect((await getDonor(bench, number)).state).toBe('stripped');
 		expect(replay(await statesOf(bench, id))).toBe('stripped');
 		expect(await caught(bringBackDonor(bench, number, {}))).toMatchObject({ code: 'gate' });
+	});
+
+	it('a step is taken back while nothing came after it, and is whole only while all is on it', async () => {
+		const number = await ready(ours.ctx);
+		const { id } = await getDonor(bench, number);
+		const parked = await parkDonor(bench, number);
+		expect(await undoDonorMove(theirs.ctx, parked)).toBe(false);
+		const stripped = await stripDonor(bench, number);
+		expect(await caught(undoDonorMove(bench, parked))).toMatchObject({ code: 'changed' });
+		expect(await undoDonorMove(bench, stripped)).toBe(true);
+		expect((await getDonor(bench, number)).state).toBe('parked');
+		const finished = await finishDonor(bench, number);
+		await undoDonorMove(bench, finished);
+		expect(await getDonor(bench, number)).toMatchObject({ state: 'parked', strippedAt: null });
+		expect(replay(await statesOf(bench, id))).toBe('parked');
+		const other = await ready(ours.ctx);
+		const opened = await stripDonor(bench, other);
+		await inShop(bench, async (tx, ctx) => {
+			const { id } = await donorRow(tx, ctx, other);
+			const tag = await mintTag(tx, ctx, 'part');
+			const of = { shopId: ctx.shopId, tag, kind: 'coil', donorId: id, grade: 'untested' } as const;
+			await tx
+				.insert(part)
+				.values({ ...of, state: 'pulled', pulledAt: ctx.now, changedAt: ctx.now });
+		});
+		expect(String(await caught(undoDonorMove(bench, opened)))).toMatch(/not whole any more/);
 	});
 
 	it('a release passed by the owner stays passed until a newer one is recorded', async () => {

@@ -30,5 +30,6 @@ export {
 	type DonorRow,
 	type ReleaseRow
 } from './rows';
+export { undoDonorMove } from './undo-move';
 export { takeIn, type TakenIn } from './take-in';
 export { getTriage, saveTriage, undoTriage } from './triage';

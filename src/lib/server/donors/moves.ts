@@ -26,7 +26,7 @@ export const move = (
 	how: DonorMove,
 	{ reason }: MoveInput,
 	more: Record<string, unknown> = {}
-): Promise<void> =>
+): Promise<number> =>
 	inShop(ctx, async (tx, ctx) => {
 		allow(ctx, how === 'sell' ? 'trade' : 'work');
 		const row = await donorRow(tx, ctx, ref, { lock: true });
@@ -34,7 +34,7 @@ export const move = (
 		if (!to) throw new Refused('gate', noMoveSaid(row.state, how));
 		needReason(row, how, reason);
 		const overruled = passGates(ctx, await gatesOf(tx, ctx, row, how), reason);
-		await writeMove(tx, ctx, row, {
+		return writeMove(tx, ctx, row, {
 			to,
 			what: SAID[how],
 			set: {

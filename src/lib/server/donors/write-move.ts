@@ -14,19 +14,19 @@ interface Written {
 	detail: Record<string, unknown>;
 }
 
-/** A donor's step with its event. */
+/** A donor's step with its event, whose number it returns. */
 export async function writeMove(
 	tx: Tx,
 	ctx: Context,
 	row: DonorRow,
 	{ to, what, set, detail }: Written
-): Promise<void> {
+): Promise<number> {
 	await tx
 		.update(donor)
 		.set({ state: to, reviewOn: null, ...set, version: row.version + 1 })
 		.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, row.id)));
 	if (['stripped', 'gone'].includes(row.state)) await announceDonor(tx, ctx, row.id, true);
-	await record(tx, ctx, {
+	return record(tx, ctx, {
 		about: 'donor',
 		aboutId: row.id,
 		what,

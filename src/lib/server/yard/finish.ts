@@ -61,15 +61,16 @@ export const getFinish = (ctx: Context, ref: string): Promise<FinishView> =>
 		return { left, grams, scrapClass, drained, account };
 	});
 
-/** Stripped, with what is left of it. */
-export const finishStripping = (ctx: Context, ref: string, input: Finish): Promise<void> =>
+/** Stripped, with what is left of it; returns the event, to undo it by. */
+export const finishStripping = (ctx: Context, ref: string, input: Finish): Promise<number> =>
 	inShop(ctx, async (tx, ctx) => {
 		allow(ctx, 'work');
 		const donor = await donorRow(tx, ctx, ref, { lock: true });
-		await finishDonor(ctx, ref);
+		const eventId = await finishDonor(ctx, ref);
 		const set = { ...input, memberId: ctx.memberId, at: ctx.now };
 		await tx
 			.insert(carcass)
 			.values({ shopId: ctx.shopId, donorId: donor.id, ...set })
 			.onConflictDoUpdate({ target: [carcass.shopId, carcass.donorId], set });
+		return eventId;
 	});

@@ -7,10 +7,10 @@ export const back = ({ params }: RequestEvent, done: string, more = '') => ({
 	to: `/${params.shop}/donors/${params.donor}?done=${encodeURIComponent(done)}${more}`
 });
 
-/** One step on the donor's way, then back to its page. */
+/** One step on the donor's way, then back to its page, where it can be undone. */
 export const moved =
 	(verb: (ctx: Context, ref: string, input: MoveInput) => Promise<unknown>, done: string) =>
 	async (ctx: Context, input: MoveInput, event: RequestEvent) => {
-		await verb(ctx, event.params.donor, input);
-		return back(event, done);
+		const made = await verb(ctx, event.params.donor, input);
+		return back(event, done, typeof made === 'number' ? `&undo=${made}` : '');
 	};

@@ -18,7 +18,7 @@ export const load = page('work', async (ctx, { params }: PageServerLoadEvent) =>
 
 export const actions = {
 	default: action('work', FinishForm, async (ctx, input, { params }: RequestEvent) => {
-		await finishStripping(ctx, params.donor, input);
-		return { to: `/${params.shop}/donors/${params.donor}?done=Stripped` };
+		const made = await finishStripping(ctx, params.donor, input);
+		return { to: `/${params.shop}/donors/${params.donor}?done=Stripped&undo=${made}` };
 	})
 };
