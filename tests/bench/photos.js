@@ -1,6 +1,7 @@
 // What a photo costs: through the whole shop against bare sharp, on the phone, in lists, and in bad faith.
 // npm run bench:photos -- [--at http://localhost:3000] [--photos 12] [--rounds 3]
 // Without --at it runs a shop of its own. With it: a built shop with the demo in it.
+import { fork } from 'node:child_process';
 import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { parseArgs } from 'node:util';
@@ -19,6 +20,7 @@ import { ensureChromium } from '../../src/run/test/chromium.js';
 const { values } = parseArgs({
 	options: {
 		at: { type: 'string' },
+		shop: { type: 'boolean', default: false },
 		photos: { type: 'string', default: '12' },
 		rounds: { type: 'string', default: '3' }
 	}
@@ -28,7 +30,7 @@ const dataDir = join(root, '.endplay-bench', 'photos');
 const stopping = new Stopping();
 stopping.onSignals();
 
-/** A fresh shop with the demo in it. Returns where it is. */
+/** A fresh shop with the demo in it. Returns how it is reached. */
 async function ownShop() {
 	mkdirSync(dataDir, { recursive: true });
 	const { settings } = readSettings({});
@@ -50,8 +52,28 @@ async function ownShop() {
 	};
 	await seed(app);
 	await startServer({ env: app, port, quiet: true, stopping });
-	Object.assign(process.env, env);
-	return app.ORIGIN;
+	return { ...env, E2E_BASE_URL: app.ORIGIN };
+}
+
+/** The shop in a process of its own, store and all: what it takes must not be the bench's to give. */
+function shopBeside() {
+	const child = fork(import.meta.filename, ['--shop'], {
+		stdio: ['ignore', 'inherit', 'inherit', 'ipc']
+	});
+	stopping.add(async () => {
+		if (child.connected) child.disconnect();
+		await new Promise((done) => child.once('exit', done));
+	});
+	return new Promise((done, fail) => {
+		child.once('message', done);
+		child.once('exit', (code) => fail(new Error(`The shop ended (${code}).`)));
+	});
+}
+
+if (values.shop) {
+	process.once('disconnect', () => void stopping.stop().then(() => process.exit(0)));
+	process.send?.(await ownShop());
+	await new Promise(() => {});
 }
 
 const vite = await createServer({
@@ -64,8 +86,8 @@ const vite = await createServer({
 });
 let missed;
 try {
-	const base = values.at ?? (await ownShop());
-	process.env.E2E_BASE_URL = base;
+	Object.assign(process.env, values.at ? { E2E_BASE_URL: values.at } : await shopBeside());
+	const base = process.env.E2E_BASE_URL;
 	const { run } = await vite.ssrLoadModule('/tests/bench/photos/main.ts');
 	missed = await run({
 		base,
