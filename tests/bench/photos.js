@@ -4,12 +4,13 @@
 import { fork } from 'node:child_process';
 import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
+import { setTimeout as wait } from 'node:timers/promises';
 import { parseArgs } from 'node:util';
 import { createServer } from 'vite';
 import { ensureBuild } from '../../src/run/build.js';
 import { migrate } from '../../src/run/migrate.js';
 import { freePort } from '../../src/run/ports.js';
-import { dropDatabase, ensureDatabase, ensureRoles } from '../../src/run/roles.js';
+import { connected, dropDatabase, ensureDatabase, ensureRoles } from '../../src/run/roles.js';
 import { seed } from '../../src/run/seed.js';
 import { startServer } from '../../src/run/server.js';
 import { startServices } from '../../src/run/services.js';
@@ -52,7 +53,19 @@ async function ownShop() {
 	};
 	await seed(app);
 	await startServer({ env: app, port, quiet: true, stopping });
+	await calm(urls.worker);
 	return { ...env, E2E_BASE_URL: app.ORIGIN };
+}
+
+/** Loading the demo leaves work in the queue, which would be measured along. @param {string} worker */
+async function calm(worker) {
+	/** @param {import('pg').Client} client */
+	const left = (client) => client.query('SELECT count(*)::int AS jobs FROM graphile_worker.jobs');
+	for (const until = Date.now() + 120_000; Date.now() < until; await wait(500)) {
+		const { rows } = await connected(worker, left);
+		if (rows[0].jobs === 0) return;
+	}
+	throw new Error('The queue does not come to rest');
 }
 
 /** The shop in a process of its own, store and all: what it takes must not be the bench's to give. */

@@ -2,9 +2,11 @@ import { dayAfter } from '$lib/donors/day';
 import { gatesShut, releaseGate, type DonorMove, type Gate } from '$lib/donors/state';
 import { may } from '$lib/people/role';
 import { Refused } from '$lib/refusal';
+import { kind } from '$lib/trade';
 import { and, eq, sql } from 'drizzle-orm';
 import type { Context } from '../context';
 import type { Tx } from '../db';
+import { part, partPhoto } from '../parts/tables';
 import { getPolicy } from '../people';
 import { newestRelease, todayIn, type DonorRow } from './rows';
 import { donor } from './tables';
@@ -62,4 +64,26 @@ export async function notToLeave(tx: Tx, ctx: Context, donorId: number): Promise
 		.where(and(eq(donor.shopId, ctx.shopId), eq(donor.id, donorId)));
 	const release = await newestRelease(tx, ctx, donorId);
 	return releaseGate(row!, release, await todayIn(ctx))[0]?.said ?? null;
+}
+
+/** A donor is not closed while a safety part off it is said to be destroyed and no picture shows it. */
+export async function needPictures(tx: Tx, ctx: Context, donorId: number): Promise<void> {
+	const unseen = await tx
+		.select({ tag: part.tag, kind: part.kind })
+		.from(part)
+		.where(
+			and(
+				eq(part.shopId, ctx.shopId),
+				eq(part.donorId, donorId),
+				eq(part.destroyed, true),
+				sql`not exists (select 1 from ${partPhoto} p
+					where p.shop_id = ${ctx.shopId} and p.part_id = ${part.id})`
+			)
+		);
+	const first = unseen.find((one) => kind(one.kind).reuse.startsWith('safety'));
+	if (first)
+		throw new Refused(
+			'gate',
+			`Photograph ${kind(first.kind).name} ${first.tag} as it is now, destroyed, before this is closed.`
+		);
 }

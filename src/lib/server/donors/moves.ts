@@ -4,7 +4,7 @@ import type { DonorState } from '$lib/donors/words';
 import { Refused } from '$lib/refusal';
 import { inShop, type Context } from '../context';
 import { allow } from '../people';
-import { gatesOf, needReason, needRoom, passGates } from './gates';
+import { gatesOf, needPictures, needReason, needRoom, passGates } from './gates';
 import { donorRow } from './rows';
 import { writeMove } from './write-move';
 
@@ -33,6 +33,7 @@ export const move = (
 		const to = afterMove(row.state, how);
 		if (!to) throw new Refused('gate', noMoveSaid(row.state, how));
 		needReason(row, how, reason);
+		if (how === 'finish') await needPictures(tx, ctx, row.id);
 		const overruled = passGates(ctx, await gatesOf(tx, ctx, row, how), reason);
 		return writeMove(tx, ctx, row, {
 			to,

@@ -5,7 +5,7 @@ import { ReleaseInput } from '$lib/donors/input';
 import { NotFound } from '$lib/refusal';
 import { Finish, ScrapRun, WasteEntry } from '$lib/yard/input';
 import { editDonor, getDonor, releaseDonor, takeIn } from '../donors';
-import { fitPart, pullPart, scrapPart, sellPart, undoPart } from '../parts';
+import { fitPart, hangPhoto, pullPart, scrapPart, sellPart, undoPart } from '../parts';
 import { putPrice } from '../prices';
 import {
 	addScrapRun,
@@ -54,6 +54,23 @@ describe('the end of stripping', () => {
 		const { account } = await getFinish(ours.ctx, donor);
 		expect(account).toMatchObject({ broughtCents: 2500, sold: 1, onShelf: 0, carriedCents: 0 });
 		expect((await getFinish(await ours.as('bench'), donor)).account).toBeNull();
+	});
+
+	it('waits for the picture of a safety part that was destroyed', async () => {
+		const donor = await donorOnBench(ours.ctx);
+		const scrapped = { reason: 'cracked', destroyed: true };
+		const { tag } = await pullPart(ours.ctx, donor, { kind: 'flywheel', scrapped });
+		expect(String(await caught(finishStripping(ours.ctx, donor, finish)))).toMatch(
+			/Photograph Flywheel/
+		);
+		await hangPhoto(ours.ctx, tag, {
+			key: `1/${crypto.randomUUID()}`,
+			width: 1,
+			height: 1,
+			bytes: 1,
+			blur: ''
+		});
+		await finishStripping(ours.ctx, donor, finish);
 	});
 
 	it('keeps the carcass as it was weighed', async () => {
