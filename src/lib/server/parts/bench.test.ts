@@ -97,11 +97,9 @@ describe('the bench of a donor', () => {
 		const donor = await rider();
 		const other = await rider();
 		const heard: string[] = [];
-		const stops = [
-			(await watchBench(ours.ctx, donor))(() => heard.push('ours')),
-			(await watchBench(ours.ctx, other))(() => heard.push('other'))
-		];
-		// the line says itself that it is open
+		const watch = [await watchBench(ours.ctx, donor), await watchBench(ours.ctx, other)] as const;
+		const stops = [watch[0](() => heard.push('ours')), watch[1](() => heard.push('other'))];
+		// the line tells those who wait for it that it is open
 		await expect.poll(() => heard.length, { timeout: 5000 }).toBeGreaterThanOrEqual(2);
 		heard.length = 0;
 		await pullPart(await ours.as('bench'), donor, { kind: 'coil', grade: 'untested' });
