@@ -111,9 +111,10 @@ test('a stale-fuel mower: all is good but what the fuel gummed', async ({ page }
 		.getByRole('button', { name: 'Kept: Ignition coil / magneto module, good used' })
 		.click();
 	await expect(came(page).first()).toContainText('good used');
+	// what has its tag has settled: nothing moves under the finger any more
+	const tag = await tagOf(came(page).first());
 	await page.getByText('Off the machine: 21 in walk-behind mower').click();
 	await expect(page.getByRole('link', { name: /^Wheel/ })).toBeVisible();
-	const tag = await tagOf(came(page).first());
 	await page.goto(`/osiergate/parts?q=${tag}`);
 	await expect(page.getByText('without kill lead')).toBeVisible();
 	await page.goto(`/osiergate/parts/${tag}`);
