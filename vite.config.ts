@@ -31,6 +31,7 @@ export default defineConfig({
 					],
 					environment: 'node',
 					maxWorkers: 2,
+					retry: 1,
 					testTimeout: 20_000,
 					hookTimeout: 60_000
 				}

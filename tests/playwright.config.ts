@@ -7,6 +7,8 @@ export default defineConfig({
 	testMatch: '*.e2e.ts',
 	outputDir: '../test-results/e2e',
 	workers: 1,
+	// a browser on a busy machine may be late once
+	retries: 1,
 	forbidOnly: true,
 	timeout: 60_000,
 	expect: { timeout: 10_000 },
